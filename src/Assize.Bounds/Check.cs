@@ -1,0 +1,29 @@
+using System.Globalization;
+
+namespace Assize.Bounds;
+
+/// <summary>Domains, written as what must hold so that NaN is refused.</summary>
+static class Check
+{
+    public static void Between(double value, double lower, double upper, string name)
+    {
+        if (!(value >= lower && value <= upper))
+            throw new ArgumentOutOfRangeException(name, value, $"must lie in [{Text(lower)}, {Text(upper)}].");
+    }
+
+    public static void Probability(double value, string name) => Between(value, 0, 1, name);
+
+    public static void Inside(double value, double lower, double upper, string name)
+    {
+        if (!(value > lower && value < upper))
+            throw new ArgumentOutOfRangeException(name, value, $"must lie in ({Text(lower)}, {Text(upper)}).");
+    }
+
+    public static void AtLeast(long value, long least, string name)
+    {
+        if (value < least)
+            throw new ArgumentOutOfRangeException(name, value, $"must be at least {least}.");
+    }
+
+    public static string Text(double value) => value.ToString("R", CultureInfo.InvariantCulture);
+}

@@ -1,0 +1,24 @@
+namespace Assize.Bounds;
+
+/// <summary>An interval that is certain to contain a probability.</summary>
+/// <remarks>Rounding is included: <see cref="Lower"/> is never above the truth and <see cref="Upper"/> never below it.</remarks>
+public sealed record Enclosure
+{
+    /// <summary>An enclosure from its two ends.</summary>
+    /// <param name="lower">The least the probability can be, in [0, <paramref name="upper"/>].</param>
+    /// <param name="upper">The most the probability can be, in [<paramref name="lower"/>, 1].</param>
+    /// <exception cref="ArgumentOutOfRangeException">An end lies outside its domain, or is NaN.</exception>
+    public Enclosure(double lower, double upper)
+    {
+        Check.Probability(upper, nameof(upper));
+        Check.Between(lower, 0, upper, nameof(lower));
+        Lower = lower;
+        Upper = upper;
+    }
+
+    /// <summary>The least the probability can be, in [0, 1]; 0 where nothing better is known.</summary>
+    public double Lower { get; }
+
+    /// <summary>The most the probability can be, in [0, 1]; 1 where nothing better is known.</summary>
+    public double Upper { get; }
+}
