@@ -19,10 +19,18 @@ static class Check
             throw new ArgumentOutOfRangeException(name, value, $"must lie in ({Text(lower)}, {Text(upper)}).");
     }
 
+    public static void Finite(double value, string name) => Between(value, double.MinValue, double.MaxValue, name);
+
     public static void AtLeast(long value, long least, string name)
     {
         if (value < least)
             throw new ArgumentOutOfRangeException(name, value, $"must be at least {least}.");
+    }
+
+    public static void AtMost(long value, long most, string name)
+    {
+        if (value > most)
+            throw new ArgumentOutOfRangeException(name, value, $"must be at most {most}.");
     }
 
     public static string Text(double value) => value.ToString("R", CultureInfo.InvariantCulture);

@@ -1,5 +1,3 @@
-using System.Globalization;
-
 namespace Assize.Bounds;
 
 /// <summary>What is claimed about a quantity: a target, and on each side the edge of what is right and the defect to catch.</summary>
@@ -135,18 +133,8 @@ public sealed record Edges
 
     // 0.1 + 0.2 - 0.3 must be the edge 0: binary arithmetic would put a defect a hair outside the domain and drop its side.
     static double Plus(double target, double distance) =>
-        Decimal(target) is { } t && Decimal(distance) is { } d ? Nearest(t + d) : target + distance;
+        Decimals.Exact(target) is { } t && Decimals.Exact(distance) is { } d ? Decimals.Nearest(t + d) : target + distance;
 
     static double Minus(double target, double distance) =>
-        Decimal(target) is { } t && Decimal(distance) is { } d ? Nearest(t - d) : target - distance;
-
-    // Beyond these magnitudes a decimal would lose digits that the double has.
-    static decimal? Decimal(double value) =>
-        value == 0 || (Math.Abs(value) > 1e-10 && Math.Abs(value) < 1e12)
-            ? decimal.Parse(Check.Text(value), NumberStyles.Float, CultureInfo.InvariantCulture)
-            : null;
-
-    // A cast from decimal may be off by one unit in the last place; parsing is not.
-    static double Nearest(decimal value) =>
-        double.Parse(value.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+        Decimals.Exact(target) is { } t && Decimals.Exact(distance) is { } d ? Decimals.Nearest(t - d) : target - distance;
 }

@@ -1,0 +1,44 @@
+namespace Assize.Bounds;
+
+public abstract partial class Law
+{
+    /// <summary>A draw that is 1 with the given rate, else 0.</summary>
+    /// <param name="rate">The probability of 1, in [0, 1].</param>
+    /// <returns>The law of one yes/no trial.</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The rate lies outside [0, 1], or is NaN.</exception>
+    public static Law Bernoulli(double rate)
+    {
+        Check.Probability(rate, nameof(rate));
+        return new Bernoulli(rate, 1 - rate);
+    }
+}
+
+sealed class Bernoulli(double rate, double other) : Law
+{
+    public override double Mean => rate;
+
+    public override double Variance => rate * other;
+
+    public override double ThirdAbsoluteCentralMoment => rate * other * (rate * rate + other * other);
+
+    public override double Minimum => rate == 1 ? 1 : 0;
+
+    public override double Maximum => rate == 0 ? 0 : 1;
+
+    public override double LogMoment(double tilt)
+    {
+        Check.Finite(tilt, nameof(tilt));
+        return tilt <= 0
+            ? Elementary.LogOnePlus(rate * Elementary.ExpMinusOne(tilt))
+            : tilt + Elementary.LogOnePlus(other * Elementary.ExpMinusOne(-tilt));
+    }
+
+    // Both rates are carried: one of them may be too near 1 to be told from it.
+    public override Law Tilted(double tilt)
+    {
+        Check.Finite(tilt, nameof(tilt));
+        double weight = Elementary.Exp(-Math.Abs(tilt));
+        var (ones, zeros) = tilt > 0 ? (rate, other * weight) : (rate * weight, other);
+        return new Bernoulli(ones / (ones + zeros), zeros / (ones + zeros));
+    }
+}

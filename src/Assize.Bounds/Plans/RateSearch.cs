@@ -1,0 +1,166 @@
+namespace Assize.Bounds;
+
+/// <summary>Which numbers of trials catch one side's defect, though their miss goes up and down like a saw.</summary>
+/// <remarks>
+/// Numbers of trials fall into runs within which either the limit, or the distance between trials and limit, stays the same and
+/// the miss is monotone: a run is settled by its ends. Below the first run to look at, and above the last, one monotone bound
+/// settles everything (see <see cref="RateSide.SmoothedMiss"/>).
+/// </remarks>
+sealed class RateSearch
+{
+    // Well above rounding, well below anything that would widen the search.
+    const double Slack = 1e-9;
+
+    readonly RateSide _side;
+    readonly RateSide? _opposite;
+    readonly double _miss;
+    readonly double _redAnyway;
+    readonly bool _limitStays;
+
+    public RateSearch(RateSide side, RateSide? opposite, double miss)
+    {
+        _side = side;
+        _opposite = opposite;
+        _miss = miss;
+        _limitStays = side.CountedRate < 0.5;
+        Proven = ChernoffTrials.Ceiling(side, miss) ?? throw RatePlan.TooManyTrials();
+        Proven++;
+        _redAnyway = opposite?.Risk ?? 0;
+        Floor = FirstPossible();
+        _redAnyway = MostRedAnyway(Floor);
+        Floor = FirstPossible();
+    }
+
+    /// <summary>No smaller number of trials works.</summary>
+    public long Floor { get; }
+
+    /// <summary>Every number of trials from here on works, by Chernoff's bound.</summary>
+    public long Proven { get; }
+
+    /// <summary>The last number of trials that fails, 0 if none does.</summary>
+    public long LastFailing()
+    {
+        long trials = CertifiedFrom() - 1;
+        while (trials >= Floor)
+        {
+            long limit = _side.Limit(trials);
+            long start = RunStart(trials, limit);
+            if (LastFailingInRun(start, trials, limit) is { } failing)
+                return failing;
+
+            trials = start - 1;
+        }
+
+        return Math.Max(0, Floor - 1);
+    }
+
+    /// <summary>The first number of trials that works, from the given one on.</summary>
+    public long NextWorking(long trials)
+    {
+        while (trials < Proven)
+        {
+            long limit = _side.Limit(trials);
+            long end = RunEnd(trials, limit);
+            if (FirstWorkingInRun(trials, end, limit) is { } working)
+                return working;
+
+            trials = end + 1;
+        }
+
+        return trials;
+    }
+
+    public bool Works(long trials)
+    {
+        double missed = _side.Missed(trials, _side.Limit(trials));
+        return Surely(missed) || (Maybe(missed) && Surely(missed - RedAnyway(trials)));
+    }
+
+    bool Surely(double missed) => RateSide.Within(missed, _miss);
+
+    bool Maybe(double missed) => missed <= (_miss + _redAnyway) * (1 + Slack);
+
+    long FirstPossible() => IntegerSearch.First(
+        1, Proven, (long)(0.8 * Proven), trials => Maybe(_side.SmoothedMiss(trials, _side.Risk)));
+
+    double RedAnyway(long trials) =>
+        _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
+
+    // The opposite limit's randomised test is the least powerful one of its level at this defect: with more trials, weaker still.
+    double MostRedAnyway(long trials) =>
+        _opposite?.TailBeyond(trials, _opposite.Limit(trials) - 1, _side.Defect) ?? 0;
+
+    // Downwards from Chernoff's number, in blocks that one evaluation settles.
+    long CertifiedFrom()
+    {
+        long trials = Proven;
+        long stride = (Proven - Floor) / 2;
+        while (stride > (trials - Floor) / 16 && stride * Math.Min(_side.CountedRate, 1 - _side.CountedRate) > 4)
+        {
+            if (trials - stride >= Floor && Certified(trials - stride, trials))
+                trials -= stride;
+            else
+                stride /= 2;
+        }
+
+        return trials;
+    }
+
+    // In the block, the plain test's level is above risk · (1 - hazard): it misses less than the smoothed test of that level.
+    bool Certified(long first, long last)
+    {
+        double hazard = _side.Hazard(first, _side.Limit(last));
+        double level = _side.Risk * (1 - hazard) * (1 - Slack);
+        return level > 0 && _side.SmoothedMiss(first, level) <= _miss * (1 - Slack);
+    }
+
+    long RunStart(long trials, long limit)
+    {
+        if (_limitStays)
+            return limit == 0 ? 1 : IntegerSearch.First(1, trials, trials, n => !Allowed(n, limit - 1));
+
+        long apart = trials - limit;
+        return IntegerSearch.First(Math.Max(1, apart), trials, trials, n => Allowed(n, n - apart));
+    }
+
+    long RunEnd(long trials, long limit)
+    {
+        long apart = trials - limit;
+        return IntegerSearch.First(trials + 1, Proven, trials + 1, n => _limitStays ? !Allowed(n, limit) : Allowed(n, n - apart - 1)) - 1;
+    }
+
+    bool Allowed(long trials, long limit) => RateSide.Within(_side.Beyond(trials, limit), _side.Risk);
+
+    long? LastFailingInRun(long start, long end, long limit)
+    {
+        long last = _limitStays
+            ? IntegerSearch.First(start, end, start, n => Surely(_side.Missed(n, limit))) - 1
+            : end;
+        for (long trials = last; trials >= start; trials--)
+        {
+            double missed = _side.Missed(trials, _limitStays ? limit : limit - (end - trials));
+            if (!_limitStays && Surely(missed))
+                return null;
+            if (!Maybe(missed) || !Works(trials))
+                return trials;
+        }
+
+        return null;
+    }
+
+    long? FirstWorkingInRun(long start, long end, long limit)
+    {
+        long first = _limitStays
+            ? IntegerSearch.First(start, end, end, n => Maybe(_side.Missed(n, limit)))
+            : start;
+        for (long trials = first; trials <= end; trials++)
+        {
+            if (!_limitStays && !Maybe(_side.Missed(trials, limit + (trials - start))))
+                return null;
+            if (Works(trials))
+                return trials;
+        }
+
+        return null;
+    }
+}

@@ -1,0 +1,83 @@
+namespace Assize.Bounds;
+
+/// <summary>One side of a rate claim, counted away from the target: successes on the upper side, failures on the lower one.</summary>
+sealed class RateSide
+{
+    // Above the largest relative error of a tail (5e-13): what is accepted is within its probability in truth.
+    const double Rounding = 1e-12;
+
+    readonly bool _upper;
+    readonly double _edge;
+    readonly double _defect;
+    readonly double _quantile;
+
+    public RateSide(bool upper, double edge, double? defect, double risk)
+    {
+        _upper = upper;
+        _edge = edge;
+        _defect = defect ?? double.NaN;
+        Risk = risk;
+        Catches = defect is not null;
+        _quantile = NormalTail.UpperQuantile(risk);
+    }
+
+    public bool Catches { get; }
+
+    public double Risk { get; }
+
+    /// <summary>The rate, at the edge, of what this side counts.</summary>
+    public double CountedRate => _upper ? _edge : 1 - _edge;
+
+    public double Edge => _edge;
+
+    public double Defect => _defect;
+
+    public static bool Within(double probability, double allowed) => probability * (1 + Rounding) <= allowed;
+
+    /// <summary>P(count > limit) at the edge.</summary>
+    public double Beyond(long trials, long limit) => TailBeyond(trials, limit, _edge);
+
+    /// <summary>P(count > limit) at any rate of success.</summary>
+    public double TailBeyond(long trials, long limit, double rate) => _upper
+        ? Binomial.UpperTail(trials, limit + 1, rate)
+        : Binomial.LowerTail(trials, trials - limit - 1, rate);
+
+    /// <summary>P(count ≤ limit) at the defect.</summary>
+    public double Missed(long trials, long limit) => _upper
+        ? Binomial.LowerTail(trials, limit, _defect)
+        : Binomial.UpperTail(trials, trials - limit, _defect);
+
+    /// <summary>The smallest limit whose excess has no more than the given probability at the edge.</summary>
+    public long Limit(long trials, double risk)
+    {
+        double mean = trials * CountedRate;
+        double quantile = risk == Risk ? _quantile : NormalTail.UpperQuantile(risk);
+        double skew = (quantile * quantile - 1) * (1 - 2 * CountedRate) / 6;
+        double guess = mean + quantile * Math.Sqrt(mean * (1 - CountedRate)) + skew;
+        return Limit(trials, risk, (long)Math.Max(0, Math.Min(trials, guess)));
+    }
+
+    public long Limit(long trials) => Limit(trials, Risk);
+
+    long Limit(long trials, double risk, long guess) =>
+        IntegerSearch.First(0, trials, guess, limit => Within(Beyond(trials, limit), risk));
+
+    /// <summary>
+    /// The miss of the most powerful test of exactly this level, randomised at its limit. It falls, or stays, as trials are
+    /// added (Neyman–Pearson; more trials contain fewer), though the miss of the plain test goes up and down like a saw.
+    /// </summary>
+    public double SmoothedMiss(long trials, double level)
+    {
+        long limit = Limit(trials, level);
+        double spare = level - Beyond(trials, limit);
+        double share = Math.Max(0, Math.Min(1, spare / Mass(trials, limit, _edge)));
+        return Missed(trials, limit) - share * Mass(trials, limit, _defect);
+    }
+
+    /// <summary>P(count = limit) / P(count ≥ limit) at the edge: grows with the limit, falls as trials are added.</summary>
+    public double Hazard(long trials, long limit) =>
+        limit > trials ? 1 : Mass(trials, limit, _edge) / Beyond(trials, limit - 1);
+
+    double Mass(long trials, long limit, double rate) =>
+        Binomial.Mass(trials, _upper ? limit : trials - limit, rate);
+}
