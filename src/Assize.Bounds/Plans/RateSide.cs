@@ -75,8 +75,17 @@ sealed class RateSide
     }
 
     /// <summary>P(count = limit) / P(count ≥ limit) at the edge: grows with the limit, falls as trials are added.</summary>
-    public double Hazard(long trials, long limit) =>
-        limit > trials ? 1 : Mass(trials, limit, _edge) / Beyond(trials, limit - 1);
+    public double Hazard(long trials, long limit)
+    {
+        if (limit > trials || _edge is 0 or 1)
+            return 1;
+        if (limit < (trials + 1) * CountedRate)
+            return Mass(trials, limit, _edge) / Beyond(trials, limit - 1);
+
+        return _upper
+            ? 1 / new BinomialPoint(trials, limit, _edge).UpperTailOverMass
+            : 1 / new BinomialPoint(trials, trials - limit, _edge).LowerTailOverMass;
+    }
 
     double Mass(long trials, long limit, double rate) =>
         Binomial.Mass(trials, _upper ? limit : trials - limit, rate);

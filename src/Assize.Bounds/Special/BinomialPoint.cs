@@ -49,9 +49,15 @@ readonly struct BinomialPoint
 
     public double LogLowerTail => Math.Min(0, _exponent + Elementary.Log(LowerFactor));
 
-    double UpperFactor => _factor * BetaFraction.TailOverMass(_successes, _failures, _rate, _other, _meanExcess);
+    /// <summary>P(S ≥ successes) / P(S = successes), from the mode upwards; it does not underflow.</summary>
+    public double UpperTailOverMass => BetaFraction.TailOverMass(_successes, _failures, _rate, _other, _meanExcess);
 
-    double LowerFactor => _factor * BetaFraction.TailOverMass(_failures, _successes, _other, _rate, -_meanExcess);
+    /// <summary>P(S ≤ successes) / P(S = successes), from the mode downwards; it does not underflow.</summary>
+    public double LowerTailOverMass => BetaFraction.TailOverMass(_failures, _successes, _other, _rate, -_meanExcess);
+
+    double UpperFactor => _factor * UpperTailOverMass;
+
+    double LowerFactor => _factor * LowerTailOverMass;
 
     // 1 - rate is exact from ½ upwards, so the logarithm of a rate near 1 loses nothing.
     static double LogRate(double rate) => rate < 0.5 ? Elementary.Log(rate) : Elementary.LogOnePlus(-(1 - rate));
