@@ -107,9 +107,12 @@ sealed class RateSearch
     }
 
     // In the block, the plain test's level is above risk · (1 - hazard): it misses less than the smoothed test of that level.
+    // At one limit the hazard falls with the trials, at one distance between trials and limit it grows.
     bool Certified(long first, long last)
     {
-        double hazard = _side.Hazard(first, _side.Limit(last));
+        double hazard = _limitStays
+            ? _side.Hazard(first, _side.Limit(last))
+            : _side.Hazard(last, last - first + _side.Limit(first));
         double level = _side.Risk * (1 - hazard) * (1 - Slack);
         return level > 0 && _side.SmoothedMiss(first, level) <= _miss * (1 - Slack);
     }

@@ -22,19 +22,30 @@ readonly struct BinomialPoint
         _other = 1 - rate;
         _successes = successes;
         _failures = trials - successes;
+        _meanExcess = MeanExcess(n, _successes, rate);
+        double deviance = Deviance(n, _successes, rate);
+        bool atEnd = _successes == 0 || _failures == 0;
+        _exponent = atEnd ? -deviance : Corrections(n, _successes, _failures) - deviance;
+        _factor = atEnd ? 1 : Math.Sqrt(n / (2 * Math.PI * _successes * _failures));
+    }
 
-        var mean = Twofold.Product(n, rate);
-        _meanExcess = mean.Upper - _successes + mean.Lower;
-        if (_successes == 0 || _failures == 0)
-        {
-            _exponent = n * (_successes == 0 ? Elementary.LogOnePlus(-rate) : LogRate(rate));
-            _factor = 1;
-            return;
-        }
+    /// <summary>trials · rate - successes, as exact as a double can be.</summary>
+    public static double MeanExcess(double trials, double successes, double rate)
+    {
+        var mean = Twofold.Product(trials, rate);
+        return mean.Upper - successes + mean.Lower;
+    }
 
-        double deviance = Deviance(_successes, _meanExcess, mean.Upper) + Deviance(_failures, -_meanExcess, n * _other);
-        _exponent = StirlingError.Of(n) - StirlingError.Of(_successes) - StirlingError.Of(_failures) - deviance;
-        _factor = Math.Sqrt(n / (2 * Math.PI * _successes * _failures));
+    /// <summary>trials · KL(successes / trials ‖ rate), without cancellation: Chernoff's exponent.</summary>
+    public static double Deviance(double trials, double successes, double rate)
+    {
+        if (successes == 0)
+            return -trials * Elementary.LogOnePlus(-rate);
+        if (successes == trials)
+            return -trials * LogRate(rate);
+
+        double excess = MeanExcess(trials, successes, rate);
+        return Part(successes, excess, trials * rate) + Part(trials - successes, -excess, trials * (1 - rate));
     }
 
     public double Mass => Math.Min(1, _factor * Elementary.Exp(_exponent));
@@ -62,8 +73,11 @@ readonly struct BinomialPoint
     // 1 - rate is exact from ½ upwards, so the logarithm of a rate near 1 loses nothing.
     static double LogRate(double rate) => rate < 0.5 ? Elementary.Log(rate) : Elementary.LogOnePlus(-(1 - rate));
 
-    // count · ln(count / mean) + mean - count, without cancellation.
-    static double Deviance(double count, double meanExcess, double mean)
+    static double Corrections(double trials, double successes, double failures) =>
+        StirlingError.Of(trials) - StirlingError.Of(successes) - StirlingError.Of(failures);
+
+    // count · ln(count / mean) + mean - count.
+    static double Part(double count, double meanExcess, double mean)
     {
         double relative = meanExcess / count;
         return relative > -0.5
