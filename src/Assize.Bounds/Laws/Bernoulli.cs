@@ -28,9 +28,11 @@ sealed class Bernoulli(double rate, double other) : Law
     public override double LogMoment(double tilt)
     {
         Check.Finite(tilt, nameof(tilt));
-        return tilt <= 0
-            ? Elementary.LogOnePlus(rate * Elementary.ExpMinusOne(tilt))
-            : tilt + Elementary.LogOnePlus(other * Elementary.ExpMinusOne(-tilt));
+        if (tilt > 700)
+            return tilt + Elementary.Log(rate + other * Elementary.Exp(-tilt));
+
+        double moment = other + rate * Elementary.Exp(tilt);
+        return moment < 0.5 ? Elementary.Log(moment) : Elementary.LogOnePlus(rate * Elementary.ExpMinusOne(tilt));
     }
 
     // Both rates are carried: one of them may be too near 1 to be told from it.

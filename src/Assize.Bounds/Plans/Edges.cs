@@ -55,9 +55,39 @@ public sealed record Edges
             UpperEdge = UpperEdgeOf(domain, Plus(target, tolerance)),
             UpperDefect = Defect(domain, Plus(target, caught)),
         };
+        RequireBelow(edges.LowerDefect ?? double.NegativeInfinity, edges.LowerEdge ?? target, caught);
+        RequireBelow(edges.UpperEdge ?? target, edges.UpperDefect ?? double.PositiveInfinity, caught);
         return edges.LowerDefect is null && edges.UpperDefect is null
             ? throw Refused($"Both defects, {Check.Text(Minus(target, caught))} and {Check.Text(Plus(target, caught))}, lie outside "
                 + $"{Text(domain)}: there is nothing to catch. Choose a smaller defect.")
+            : edges;
+    }
+
+    /// <summary>The claim that a quantity lies between two edges, with its own defect beyond each.</summary>
+    /// <param name="domain">The values the quantity can take.</param>
+    /// <param name="target">The value claimed, in the domain and between the edges.</param>
+    /// <param name="lowerDefect">From here downwards it must be caught: a value below the lower edge; null for nothing to catch.</param>
+    /// <param name="lowerEdge">The least value that is still right; null when no value is too low.</param>
+    /// <param name="upperEdge">The greatest value that is still right; null when no value is too high.</param>
+    /// <param name="upperDefect">From here upwards it must be caught: a value above the upper edge; null for nothing to catch.</param>
+    /// <returns>The edges; those outside the domain are dropped.</returns>
+    /// <exception cref="ClaimRefusedException">A number is out of order or NaN, or nothing is left to catch.</exception>
+    public static Edges Between(
+        Domain domain, double target, double? lowerDefect, double? lowerEdge, double? upperEdge, double? upperDefect)
+    {
+        RequireTarget(domain, target);
+        RequireOrder(lowerEdge ?? double.NegativeInfinity, target, upperEdge ?? double.PositiveInfinity);
+        RequireBeyond(lowerEdge, lowerDefect, lowerDefect < lowerEdge);
+        RequireBeyond(upperEdge, upperDefect, upperDefect > upperEdge);
+        var edges = new Edges(domain, target)
+        {
+            LowerDefect = lowerDefect is { } below ? Defect(domain, below) : null,
+            LowerEdge = lowerEdge is { } lower ? LowerEdgeOf(domain, lower) : null,
+            UpperEdge = upperEdge is { } upper ? UpperEdgeOf(domain, upper) : null,
+            UpperDefect = upperDefect is { } above ? Defect(domain, above) : null,
+        };
+        return edges.LowerDefect is null && edges.UpperDefect is null
+            ? throw Refused($"No defect lies inside {Text(domain)}: there is nothing to catch. Give a defect nearer to its edge.")
             : edges;
     }
 
@@ -111,14 +141,26 @@ public sealed record Edges
             throw Refused($"The defect must be a distance above 0; it is {Check.Text(defect)}.");
     }
 
+    static void RequireOrder(double lower, double target, double upper)
+    {
+        if (!(lower <= target && target <= upper))
+            throw Refused($"The target ({Check.Text(target)}) must lie between the edges, {Check.Text(lower)} and {Check.Text(upper)}.");
+    }
+
+    static void RequireBeyond(double? edge, double? defect, bool beyond)
+    {
+        if (defect is { } value && !beyond)
+            throw Refused($"The defect ({Check.Text(value)}) must lie beyond its edge ({(edge is { } rim ? Check.Text(rim) : "none given")}).");
+    }
+
     static void RequireBelow(double lower, double upper, double defect)
     {
         if (!(lower < upper))
-            throw Refused($"The defect ({Check.Text(defect)}) is too small to be told from the target in double precision. Choose a larger one.");
+            throw Refused($"The defect ({Check.Text(defect)}) cannot be told from the target or the tolerance in double precision. Choose a larger one.");
     }
 
     static double? Defect(Domain domain, double value) =>
-        value >= domain.Minimum && value <= domain.Maximum ? value : null;
+        value >= domain.Minimum && value <= domain.Maximum && Math.Abs(value) <= double.MaxValue ? value : null;
 
     static double? LowerEdgeOf(Domain domain, double value) => value > domain.Minimum ? value : null;
 
