@@ -32,6 +32,13 @@ sealed class ExactBinomial
         return (ways << 1074).CompareTo(Scaled(probability) << _bits);
     }
 
+    /// <summary>The sign of P(S &lt; low) + P(S &gt; high) minus a probability, without rounding.</summary>
+    public int CompareOutside(long low, long high, double probability)
+    {
+        var ways = Tail(0) - Tail(low) + Tail(high + 1);
+        return (ways << 1074).CompareTo(Scaled(probability) << _bits);
+    }
+
     public int CompareAtLeast(long successes, double probability) => CompareBetween(successes, Trials, probability);
 
     public int CompareAtMost(long successes, double probability) => CompareBetween(0, successes, probability);

@@ -67,8 +67,12 @@ public static class BinomialTail
         return new Enclosure(Math.Min(1, below.Lower + above.Lower), Math.Min(1, below.Upper + above.Upper));
     }
 
-    static Enclosure Less(Enclosure whole, Enclosure part) =>
-        new(Math.Max(0, whole.Lower - part.Upper), Math.Max(0, whole.Upper - part.Lower));
+    // The part may be so small that its own width is lost when the difference is rounded.
+    static Enclosure Less(Enclosure whole, Enclosure part) => part.Upper == 0
+        ? whole
+        : new Enclosure(
+            Math.Max(0, (whole.Lower - part.Upper) * (1 - Rounding)),
+            Math.Min(1, Math.Max(0, (whole.Upper - part.Lower) * (1 + Rounding))));
 
     // Below the least normal number a relative error means nothing.
     static Enclosure Widened(double probability, bool known) => known
