@@ -51,7 +51,7 @@ public class BinomialTailTests
             }
         }
 
-        Assert.Equal(1791, seen);
+        Assert.Equal(1683, seen);
     }
 
     [Fact]
