@@ -1,4 +1,5 @@
 using System.Reflection;
+using System.Runtime.CompilerServices;
 
 namespace Assize.Testing;
 
@@ -7,6 +8,12 @@ static class PublicApi
 {
     const BindingFlags Members =
         BindingFlags.Public | BindingFlags.NonPublic | BindingFlags.Instance | BindingFlags.Static | BindingFlags.DeclaredOnly;
+
+    static readonly Dictionary<Type, string> Keywords = new()
+    {
+        [typeof(void)] = "void", [typeof(bool)] = "bool", [typeof(int)] = "int", [typeof(long)] = "long", [typeof(ulong)] = "ulong",
+        [typeof(double)] = "double", [typeof(string)] = "string", [typeof(object)] = "object",
+    };
 
     public static string Of(Assembly assembly) => string.Concat(
         from type in assembly.GetExportedTypes()
@@ -25,6 +32,8 @@ static class PublicApi
     static bool IsVisible(MemberInfo member) => !member.Name.Contains('<', StringComparison.Ordinal) && member switch
     {
         FieldInfo field => (field.IsPublic || field.IsFamily || field.IsFamilyOrAssembly) && !field.IsSpecialName,
+        // What the compiler adds to every record says nothing.
+        MethodInfo method when method.IsDefined(typeof(CompilerGeneratedAttribute)) => false,
         MethodBase method => (method.IsPublic || method.IsFamily || method.IsFamilyOrAssembly) && !IsAccessor(method),
         PropertyInfo property => property.GetAccessors(nonPublic: true).Any(IsVisible),
         EventInfo item => item.AddMethod is { IsPublic: true },
@@ -69,7 +78,7 @@ static class PublicApi
     static string Kind(Type type) =>
         type.IsInterface ? "interface" : type.IsEnum ? "enum" : type.IsValueType ? "struct"
         : type is { IsAbstract: true, IsSealed: true } ? "static class" : type.IsAbstract ? "abstract class"
-        : type.IsSealed ? "sealed class" : "class";
+        : (type.IsSealed ? "sealed " : "") + (type.GetMethod("<Clone>$") is null ? "class" : "record");
 
     static string Bases(Type type) =>
         type.BaseType is { } parent && parent != typeof(object) && !type.IsValueType ? $" : {Name(parent)}" : "";
@@ -82,6 +91,9 @@ static class PublicApi
             return $"{Name(underlying)}?";
         if (type.HasElementType)
             return Name(type.GetElementType()!) + (type.IsArray ? "[]" : "&");
+
+        if (Keywords.TryGetValue(type, out string? keyword))
+            return keyword;
 
         string name = (type.DeclaringType is { } outer ? $"{Name(outer)}." : "") + type.Name.Split('`')[0];
         return type.IsGenericType ? $"{name}<{string.Join(", ", type.GetGenericArguments().Select(Name))}>" : name;

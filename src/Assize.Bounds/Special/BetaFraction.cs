@@ -33,6 +33,6 @@ static class BetaFraction
         }
 
         throw new InvalidOperationException(
-            $"The tail of {successes} successes and {failures} failures at rate {Check.Text(rate)} did not settle in {Cap} steps.");
+            $"The tail of {Check.Text(successes)} successes and {Check.Text(failures)} failures at rate {Check.Text(rate)} did not settle in {Cap} steps.");
     }
 }
