@@ -3,7 +3,7 @@ namespace Assize.Bounds;
 /// <summary>One count of a binomial distribution, 0 &lt; rate &lt; 1: its probability and the tails that begin there.</summary>
 /// <remarks>
 /// Mass: C. Loader, Fast and accurate computation of binomial probabilities (2000), with the deviance fed by the exact difference of mean and count.
-/// Tails: mass times a continued fraction, see <see cref="BetaFraction"/>.
+/// Tails: mass times a series near the centre (<see cref="CentralSeries"/>) or a continued fraction (<see cref="BetaFraction"/>).
 /// </remarks>
 readonly struct BinomialPoint
 {
@@ -61,10 +61,10 @@ readonly struct BinomialPoint
     public double LogLowerTail => Math.Min(0, _exponent + Elementary.Log(LowerFactor));
 
     /// <summary>P(S ≥ successes) / P(S = successes), from the mode upwards; it does not underflow.</summary>
-    public double UpperTailOverMass => BetaFraction.TailOverMass(_successes, _failures, _rate, _other, _meanExcess);
+    public double UpperTailOverMass => TailOverMass(_successes, _failures, _rate, _other, _meanExcess);
 
     /// <summary>P(S ≤ successes) / P(S = successes), from the mode downwards; it does not underflow.</summary>
-    public double LowerTailOverMass => BetaFraction.TailOverMass(_failures, _successes, _other, _rate, -_meanExcess);
+    public double LowerTailOverMass => TailOverMass(_failures, _successes, _other, _rate, -_meanExcess);
 
     double UpperFactor => _factor * UpperTailOverMass;
 
@@ -72,6 +72,10 @@ readonly struct BinomialPoint
 
     // 1 - rate is exact from ½ upwards, so the logarithm of a rate near 1 loses nothing.
     static double LogRate(double rate) => rate < 0.5 ? Elementary.Log(rate) : Elementary.LogOnePlus(-(1 - rate));
+
+    static double TailOverMass(double successes, double failures, double rate, double other, double meanExcess) =>
+        CentralSeries.TailOverMass(successes, failures, rate, other, meanExcess)
+        ?? BetaFraction.TailOverMass(successes, failures, rate, other, meanExcess);
 
     static double Corrections(double trials, double successes, double failures) =>
         StirlingError.Of(trials) - StirlingError.Of(successes) - StirlingError.Of(failures);
