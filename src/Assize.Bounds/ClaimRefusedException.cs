@@ -1,6 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>The numbers of a claim cannot be met, or a draw broke a fact: thrown before, or at, the draw concerned.</summary>
+/// <summary>The numbers of a claim cannot be met, or a draw broke a fact: thrown before, or at, the draw
+/// concerned.</summary>
 public sealed class ClaimRefusedException : ArgumentException
 {
     /// <summary>A refusal that names the value at fault and its cure.</summary>

@@ -1,7 +1,8 @@
 namespace Assize.Bounds;
 
 /// <summary>An interval that is certain to contain a probability.</summary>
-/// <remarks>Rounding is included: <see cref="Lower"/> is never above the truth and <see cref="Upper"/> never below it.</remarks>
+/// <remarks>Rounding is included: <see cref="Lower"/> is never above the truth and <see cref="Upper"/> never below
+/// it.</remarks>
 public sealed record Enclosure
 {
     /// <summary>An enclosure from its two ends.</summary>

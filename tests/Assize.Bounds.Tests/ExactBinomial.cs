@@ -2,7 +2,8 @@ using System.Numerics;
 
 namespace Assize.Bounds.Tests;
 
-/// <summary>Binomial probabilities in whole numbers: a double is a fraction m / 2^e, so every probability is one over 2^(e·n).</summary>
+/// <summary>Binomial probabilities in whole numbers: a double is a fraction m / 2^e, so every probability is one over
+/// 2^(e·n).</summary>
 sealed class ExactBinomial
 {
     readonly BigInteger[] _atLeast;

@@ -2,7 +2,8 @@ namespace Assize.Bounds;
 
 /// <summary>From how many trials on a band of shares is red seldom enough.</summary>
 /// <remarks>
-/// Above some number an envelope that falls with the trials settles everything: A. M. Zubkov and A. A. Serov, Theory Probab. Appl. 57 (2013) 539–544,
+/// Above some number an envelope that falls with the trials settles everything: A. M. Zubkov and A. A. Serov, Theory
+/// Probab. Appl. 57 (2013) 539–544,
 /// P(S ≥ k) ≤ Q(√(2n KL((k-1)/n ‖ p))), with k ≥ n · high. Below it, exact tails look for the last number that fails.
 /// </remarks>
 sealed class BandSearch

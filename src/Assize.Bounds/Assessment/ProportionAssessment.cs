@@ -1,6 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>What an existing assertion on a count of successes does: how often it is red on right code and what it catches.</summary>
+/// <summary>What an existing assertion on a count of successes does: how often it is red on right code and what it
+/// catches.</summary>
 public static class ProportionAssessment
 {
     /// <summary>The theorem behind every answer of this class.</summary>
@@ -9,7 +10,8 @@ public static class ProportionAssessment
     /// <summary>How often the assertion is red.</summary>
     /// <param name="trials">Number of trials, in [1, 2^52].</param>
     /// <param name="acceptLow">Least number of successes that passes.</param>
-    /// <param name="acceptHigh">Greatest number of successes that passes, at least <paramref name="acceptLow"/> - 1.</param>
+    /// <param name="acceptHigh">Greatest number of successes that passes, at least <paramref name="acceptLow"/> -
+    /// 1.</param>
     /// <param name="rate">The true rate, in [0, 1].</param>
     /// <returns>An enclosure of the probability of red: the false failure if the rate is right.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
@@ -26,11 +28,13 @@ public static class ProportionAssessment
     /// <param name="rate">The right rate, in [0, 1].</param>
     /// <param name="confidence">How surely an error must turn the assertion red, in (0, 1).</param>
     /// <returns>
-    /// The signed distance from the rate, in the nearer direction, from which on the assertion is red with that probability,
+    /// The signed distance from the rate, in the nearer direction, from which on the assertion is red with that
+    /// probability,
     /// rounded away from 0; 0 when it is red so often on the right rate; null when it catches no rate at all.
     /// </returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
-    public static double? SmallestDefectCaught(long trials, long acceptLow, long acceptHigh, double rate, double confidence)
+    public static double? SmallestDefectCaught(
+        long trials, long acceptLow, long acceptHigh, double rate, double confidence)
     {
         Check.AtLeast(trials, 1, nameof(trials));
         Check.Probability(rate, nameof(rate));
@@ -52,8 +56,10 @@ public static class ProportionAssessment
     /// <param name="rate">The right rate, in [0, 1].</param>
     /// <param name="risk">The false failure allowed, in [1e-300, 1].</param>
     /// <returns>
-    /// A number from which on every number of trials is red with no more than that probability; at most one step of the count
-    /// above the least such number. Null when the rate is not inside the band, or more than 1e15 trials would be needed.
+    /// A number from which on every number of trials is red with no more than that probability; at most one step of
+    /// the count
+    /// above the least such number. Null when the rate is not inside the band, or more than 1e15 trials would be
+    /// needed.
     /// </returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static long? TrialsNeeded(ProportionBand band, double rate, double risk)
@@ -69,7 +75,8 @@ public static class ProportionAssessment
     /// <param name="trials">Number of trials, in [1, 1e15].</param>
     /// <param name="rate">The right rate, in [0, 1].</param>
     /// <param name="risk">The false failure allowed, in [1e-300, 1).</param>
-    /// <returns>The distance from the rate to the rims; no share lies on a rim, so it does not matter whether rims pass.</returns>
+    /// <returns>The distance from the rate to the rims; no share lies on a rim, so it does not matter whether rims
+    /// pass.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double ToleranceAffordable(long trials, double rate, double risk)
     {

@@ -14,7 +14,8 @@ static class ChernoffTrials
     }
 
     /// <summary>
-    /// At some rate x between edge and defect, n·KL(x‖edge) ≥ ln(1/risk) and n·KL(x‖defect) ≥ ln(1/miss): a limit at n·x meets both,
+    /// At some rate x between edge and defect, n·KL(x‖edge) ≥ ln(1/risk) and n·KL(x‖defect) ≥ ln(1/miss): a limit at
+    /// n·x meets both,
     /// for this and every larger n.
     /// </summary>
     static double Of(double edge, double defect, double risk, double miss)

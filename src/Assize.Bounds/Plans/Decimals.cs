@@ -9,7 +9,8 @@ static class Decimals
     public static double Complement(double value) =>
         Exact(value) is { } exact ? Nearest(1 - exact) : Math.Min(1 - value, 1 - 1.2e-16);
 
-    /// <summary>The shortest decimal that reads back as this double; null where a decimal would lose digits that the double has.</summary>
+    /// <summary>The shortest decimal that reads back as this double; null where a decimal would lose digits that the
+    /// double has.</summary>
     public static decimal? Exact(double value) =>
         value == 0 || (Math.Abs(value) > 1e-10 && Math.Abs(value) < 1e12)
             ? decimal.Parse(Check.Text(value), NumberStyles.Float, CultureInfo.InvariantCulture)

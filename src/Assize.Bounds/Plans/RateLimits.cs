@@ -1,6 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>Which numbers of successes uphold a rate claim at a number of trials, and how often that verdict is wrong.</summary>
+/// <summary>Which numbers of successes uphold a rate claim at a number of trials, and how often that verdict is
+/// wrong.</summary>
 public sealed class RateLimits
 {
     internal RateLimits(long trials, long acceptLow, long acceptHigh) =>
@@ -12,7 +13,8 @@ public sealed class RateLimits
     /// <summary>The least number of successes that upholds the claim, in [0, <see cref="Trials"/>].</summary>
     public long AcceptLow { get; }
 
-    /// <summary>The greatest number of successes that upholds the claim, in [<see cref="AcceptLow"/>, <see cref="Trials"/>].</summary>
+    /// <summary>The greatest number of successes that upholds the claim, in [<see cref="AcceptLow"/>,
+    /// <see cref="Trials"/>].</summary>
     public long AcceptHigh { get; }
 
     /// <summary>The probability of red where it is greatest within the tolerance: at one of the edges.</summary>

@@ -1,9 +1,12 @@
 namespace Assize.Bounds;
 
-/// <summary>How many trials a claim about a rate takes, and which counts of successes uphold it, both errors bounded.</summary>
+/// <summary>How many trials a claim about a rate takes, and which counts of successes uphold it, both errors
+/// bounded.</summary>
 /// <remarks>
-/// Exact binomial tails decide. A two-sided claim gives half its risk to each side; either miss may use all of its allowance,
-/// since the rate cannot be too low and too high at once. A side without a defect to catch keeps its limit and asks nothing of the miss.
+/// Exact binomial tails decide. A two-sided claim gives half its risk to each side; either miss may use all of its
+/// allowance,
+/// since the rate cannot be too low and too high at once. A side without a defect to catch keeps its limit and asks
+/// nothing of the miss.
 /// </remarks>
 public sealed class RatePlan
 {
@@ -33,28 +36,31 @@ public sealed class RatePlan
         Trials = _searches.Max(search => search.LastFailing()) + 1;
         FirstTrials = FirstThatWorks();
         Limits = LimitsAt(Trials);
-        _theorems = new(() => [.. RateTheorem.All().Select(TrialsOf).OrderBy(theorem => theorem.Trials ?? long.MaxValue)]);
+        _theorems = new(() =>
+            [.. RateTheorem.All().Select(TrialsOf).OrderBy(theorem => theorem.Trials ?? long.MaxValue)]);
     }
 
     /// <summary>The plan for a claim.</summary>
     /// <param name="edges">The claim's target, edges and defects, in the domain [0, 1].</param>
     /// <param name="risk">The probability of a false failure allowed, in [1e-300, 1).</param>
-    /// <param name="confidence">One minus the probability of a missed defect allowed, in (0, 1) and above the risk.</param>
+    /// <param name="confidence">One minus the probability of a missed defect allowed, in (0, 1) and above the
+    /// risk.</param>
     /// <returns>A plan that meets both, with the fewest trials from which every larger number meets them too.</returns>
-    /// <exception cref="ClaimRefusedException">A number lies outside its domain, or more than 1e15 trials would be needed.</exception>
+    /// <exception cref="ClaimRefusedException">A number lies outside its domain, or more than 1e15 trials would be
+    /// needed.</exception>
     public static RatePlan For(Edges edges, double risk, double confidence)
     {
         if (edges is null)
             throw new ArgumentNullException(nameof(edges));
         if (!(edges.Domain.Minimum >= 0 && edges.Domain.Maximum <= 1))
-            throw new ClaimRefusedException("A rate lies between 0 and 1; these edges are for another quantity. Build them with Domain.Rate.");
+            throw Refused("A rate lies between 0 and 1; these edges are of another quantity. Use Domain.Rate.");
         if (!(risk >= LeastProbability && risk < 1))
-            throw new ClaimRefusedException($"The risk must lie between 1e-300 and 1; it is {Check.Text(risk)}. Usual is 1e-9.");
+            throw Refused($"The risk must lie between 1e-300 and 1; it is {Check.Text(risk)}. Usual is 1e-9.");
         if (!(confidence > 0 && confidence < 1))
-            throw new ClaimRefusedException($"The confidence must lie between 0 and 1; it is {Check.Text(confidence)}. Usual is 0.999.");
+            throw Refused($"The confidence must lie between 0 and 1; it is {Check.Text(confidence)}. Usual is 0.999.");
         if (!(confidence > risk))
-            throw new ClaimRefusedException($"The confidence ({Check.Text(confidence)}) must be greater than the risk ({Check.Text(risk)}): "
-                + "a verdict that ignores the draws would do as well.");
+            throw Refused($"The confidence ({Check.Text(confidence)}) must be greater than the risk "
+                + $"({Check.Text(risk)}): a verdict that ignores the draws would do as well.");
 
         return new RatePlan(edges, risk, confidence);
     }
@@ -71,7 +77,8 @@ public sealed class RatePlan
     /// <summary>1 - <see cref="Confidence"/>, taken in decimal: 0.999 gives 0.001.</summary>
     public double Miss { get; }
 
-    /// <summary>The plan: the smallest number of trials such that it and every larger number meet risk and confidence.</summary>
+    /// <summary>The plan: the smallest number of trials such that it and every larger number meet risk and
+    /// confidence.</summary>
     public long Trials { get; }
 
     /// <summary>The smallest number of trials that meets them at all; some larger ones do not.</summary>
@@ -107,7 +114,9 @@ public sealed class RatePlan
         };
     }
 
-    internal static ClaimRefusedException TooManyTrials() => new(
+    static ClaimRefusedException Refused(string message) => new(message);
+
+    internal static ClaimRefusedException TooManyTrials() => Refused(
         "This claim would take more than 1e15 trials. Choose a larger defect, a larger risk or a smaller confidence.");
 
     long FirstThatWorks()
@@ -125,7 +134,7 @@ public sealed class RatePlan
 
     TheoremTrials TrialsOf(RateTheorem theorem) => new(
         theorem.Name,
-        theorem.TrialsNeeded(this, [.. new[] { _lower, _upper }.OfType<RateSide>()]),
+        theorem.TrialsNeeded(this, [.. new[] { _lower, _upper }.OfType<RateSide>().Where(side => side.Catches)]),
         theorem.Assumes);
 
     static Enclosure Greater(RateSide? lower, RateSide? upper, Func<RateSide, Enclosure> probability)

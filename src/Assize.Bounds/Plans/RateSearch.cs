@@ -2,8 +2,10 @@ namespace Assize.Bounds;
 
 /// <summary>Which numbers of trials catch one side's defect, though their miss goes up and down like a saw.</summary>
 /// <remarks>
-/// Numbers of trials fall into runs within which either the limit, or the distance between trials and limit, stays the same and
-/// the miss is monotone: a run is settled by its ends. Below the first run to look at, and above the last, one monotone bound
+/// Numbers of trials fall into runs within which either the limit, or the distance between trials and limit, stays
+/// the same and
+/// the miss is monotone: a run is settled by its ends. Below the first run to look at, and above the last, one
+/// monotone bound
 /// settles everything (see <see cref="RateSide.SmoothedMiss"/>).
 /// </remarks>
 sealed class RateSearch
@@ -86,7 +88,8 @@ sealed class RateSearch
     double RedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
 
-    // The opposite limit's randomised test is the least powerful one of its level at this defect: with more trials, weaker still.
+    // The opposite limit's randomised test is the least powerful one of its level at this defect: with more trials,
+    // weaker still.
     double MostRedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials) - 1, _side.Defect) ?? 0;
 
@@ -106,7 +109,8 @@ sealed class RateSearch
         return trials;
     }
 
-    // In the block, the plain test's level is above risk · (1 - hazard): it misses less than the smoothed test of that level.
+    // In the block, the plain test's level is above risk · (1 - hazard): it misses less than the smoothed test of
+    // that level.
     // At one limit the hazard falls with the trials, at one distance between trials and limit it grows.
     bool Certified(long first, long last)
     {
@@ -129,7 +133,8 @@ sealed class RateSearch
     long RunEnd(long trials, long limit)
     {
         long apart = trials - limit;
-        return IntegerSearch.First(trials + 1, Proven, trials + 1, n => _limitStays ? !Allowed(n, limit) : Allowed(n, n - apart - 1)) - 1;
+        bool Ended(long n) => _limitStays ? !Allowed(n, limit) : Allowed(n, n - apart - 1);
+        return IntegerSearch.First(trials + 1, Proven, trials + 1, Ended) - 1;
     }
 
     bool Allowed(long trials, long limit) => RateSide.Within(_side.Beyond(trials, limit), _side.Risk);

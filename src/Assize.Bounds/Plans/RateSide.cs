@@ -1,6 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>One side of a rate claim, counted away from the target: successes on the upper side, failures on the lower one.</summary>
+/// <summary>One side of a rate claim, counted away from the target: successes on the upper side, failures on the
+/// lower one.</summary>
 sealed class RateSide
 {
     // Above the largest relative error of a tail (5e-13): what is accepted is within its probability in truth.
@@ -63,8 +64,10 @@ sealed class RateSide
         IntegerSearch.First(0, trials, guess, limit => Within(Beyond(trials, limit), risk));
 
     /// <summary>
-    /// The miss of the most powerful test of exactly this level, randomised at its limit. It falls, or stays, as trials are
-    /// added (Neyman–Pearson; more trials contain fewer), though the miss of the plain test goes up and down like a saw.
+    /// The miss of the most powerful test of exactly this level, randomised at its limit. It falls, or stays, as
+    /// trials are
+    /// added (Neyman–Pearson; more trials contain fewer), though the miss of the plain test goes up and down like a
+    /// saw.
     /// </summary>
     public double SmoothedMiss(long trials, double level)
     {
@@ -74,7 +77,8 @@ sealed class RateSide
         return Missed(trials, limit) - share * Mass(trials, limit, _defect);
     }
 
-    /// <summary>P(count = limit) / P(count ≥ limit) at the edge: grows with the limit, falls as trials are added.</summary>
+    /// <summary>P(count = limit) / P(count ≥ limit) at the edge: grows with the limit, falls as trials are
+    /// added.</summary>
     public double Hazard(long trials, long limit)
     {
         if (limit > trials || _edge is 0 or 1)

@@ -1,31 +1,18 @@
 namespace Assize.Bounds;
 
-/// <summary>A theorem that can size a rate plan. Every subclass in the assembly is found: a new one is one new file.</summary>
+/// <summary>A theorem that can size a rate plan. Every subclass in the assembly is found: a new one is one new
+/// file.</summary>
 abstract class RateTheorem
 {
     public abstract string Name { get; }
 
     public abstract string Assumes { get; }
 
-    /// <summary>From here on every number of trials catches one side's defect; null when none up to the cap does.</summary>
-    public abstract long? TrialsNeeded(RateSide side, double miss);
-
-    /// <summary>The same for a whole plan: its sides one by one, unless the theorem can do better.</summary>
-    public virtual long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides)
-    {
-        long needed = 0;
-        foreach (var side in sides)
-        {
-            if (!side.Catches)
-                continue;
-            if (TrialsNeeded(side, plan.Miss) is not { } trials)
-                return null;
-
-            needed = Math.Max(needed, trials);
-        }
-
-        return needed;
-    }
+    /// <summary>From here on every number of trials is proven to meet the plan; null when none up to the cap
+    /// is.</summary>
+    /// <param name="plan">The plan, for its miss.</param>
+    /// <param name="sides">The sides that have a defect to catch, one or two.</param>
+    public abstract long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides);
 
     public static IEnumerable<RateTheorem> All() =>
         from type in typeof(RateTheorem).Assembly.GetTypes()
@@ -33,10 +20,18 @@ abstract class RateTheorem
         orderby type.FullName
         select (RateTheorem)Activator.CreateInstance(type, nonPublic: true);
 
+    /// <summary>The greater of what the sides need; null when one of them finds no number.</summary>
+    protected static long? Greatest(IReadOnlyList<RateSide> sides, Func<RateSide, long?> needed)
+    {
+        long?[] trials = [.. sides.Select(needed)];
+        return Array.TrueForAll(trials, number => number is not null) ? trials.Max() : null;
+    }
+
     /// <summary>The first number of trials that suffices, when every larger one does; null beyond the cap.</summary>
     public static long? First(double guess, Func<long, bool> suffices)
     {
-        long found = IntegerSearch.First(1, RatePlan.MaximumTrials, (long)Math.Min(guess, RatePlan.MaximumTrials), suffices);
-        return found <= RatePlan.MaximumTrials ? found : null;
+        const long most = RatePlan.MaximumTrials;
+        long found = IntegerSearch.First(1, most, (long)Math.Min(guess, most), suffices);
+        return found <= most ? found : null;
     }
 }

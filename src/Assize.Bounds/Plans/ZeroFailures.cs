@@ -1,6 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>Claims that a thing never happens, or always does: one contrary draw refutes them, so no risk is spent.</summary>
+/// <summary>Claims that a thing never happens, or always does: one contrary draw refutes them, so no risk is
+/// spent.</summary>
 public static class ZeroFailures
 {
     /// <summary>Whether a claim is one that a single contrary draw refutes.</summary>
@@ -30,6 +31,7 @@ public static class ZeroFailures
         if (!(trials < RatePlan.MaximumTrials))
             throw RatePlan.TooManyTrials();
 
-        return IntegerSearch.First(1, RatePlan.MaximumTrials, (long)trials, n => RateSide.Within(Binomial.LowerTail(n, 0, defect), miss));
+        return IntegerSearch.First(
+            1, RatePlan.MaximumTrials, (long)trials, n => RateSide.Within(Binomial.LowerTail(n, 0, defect), miss));
     }
 }

@@ -1,14 +1,17 @@
 namespace Assize.Bounds;
 
-/// <summary>The continued fraction of the incomplete beta function in its even part, for counts beyond the mode.</summary>
-/// <remarks>A. R. Didonato and A. H. Morris, ACM Trans. Math. Softw. 18 (1992) 360–373, eq. 9. A plain fraction lost up to 1e-7.</remarks>
+/// <summary>The continued fraction of the incomplete beta function in its even part, for counts beyond the
+/// mode.</summary>
+/// <remarks>A. R. Didonato and A. H. Morris, ACM Trans. Math. Softw. 18 (1992) 360–373, eq. 9. A plain fraction lost
+/// up to 1e-7.</remarks>
 static class BetaFraction
 {
     const int Cap = 1_000_000;
     const double Precision = 1e-16;
     const double Large = 1e120;
 
-    /// <summary>P(S ≥ successes) / P(S = successes), where successes ≥ (trials + 1) · rate and meanExcess = trials · rate - successes.</summary>
+    /// <summary>P(S ≥ successes) / P(S = successes), where successes ≥ (trials + 1) · rate and meanExcess = trials ·
+    /// rate - successes.</summary>
     public static double TailOverMass(double successes, double failures, double rate, double other, double meanExcess)
     {
         double a = successes;
@@ -33,6 +36,7 @@ static class BetaFraction
         }
 
         throw new InvalidOperationException(
-            $"The tail of {Check.Text(successes)} successes and {Check.Text(failures)} failures at rate {Check.Text(rate)} did not settle in {Cap} steps.");
+            $"The tail of {Check.Text(successes)} successes and {Check.Text(failures)} failures "
+            + $"at rate {Check.Text(rate)} did not settle in {Cap} steps.");
     }
 }

@@ -2,7 +2,8 @@ namespace Assize.Bounds;
 
 /// <summary>Probabilities of the number of successes in independent trials of one rate.</summary>
 /// <remarks>
-/// Relative error below 5e-13 while the result is above 1e-300, for every number of trials up to 1e9. The rate is taken as the
+/// Relative error below 5e-13 while the result is above 1e-300, for every number of trials up to 1e9. The rate is
+/// taken as the
 /// exact double it is, and 1 - rate is never rounded where that would show.
 /// </remarks>
 public static class Binomial

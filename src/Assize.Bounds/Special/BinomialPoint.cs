@@ -1,9 +1,12 @@
 namespace Assize.Bounds;
 
-/// <summary>One count of a binomial distribution, 0 &lt; rate &lt; 1: its probability and the tails that begin there.</summary>
+/// <summary>One count of a binomial distribution, 0 &lt; rate &lt; 1: its probability and the tails that begin
+/// there.</summary>
 /// <remarks>
-/// Mass: C. Loader, Fast and accurate computation of binomial probabilities (2000), with the deviance fed by the exact difference of mean and count.
-/// Tails: mass times a series near the centre (<see cref="CentralSeries"/>) or a continued fraction (<see cref="BetaFraction"/>).
+/// Mass: C. Loader, Fast and accurate computation of binomial probabilities (2000), with the deviance fed by the
+/// exact difference of mean and count.
+/// Tails: mass times a series near the centre (<see cref="CentralSeries"/>) or a continued fraction
+/// (<see cref="BetaFraction"/>).
 /// </remarks>
 readonly struct BinomialPoint
 {

@@ -1,8 +1,10 @@
 namespace Assize.Bounds;
 
-/// <summary>A tail of a binomial distribution near its centre, where the continued fraction is slow: a series around the normal tail.</summary>
+/// <summary>A tail of a binomial distribution near its centre, where the continued fraction is slow: a series around
+/// the normal tail.</summary>
 /// <remarks>
-/// P(S ≥ k) / P(S = k) = (k/p) ∫ exp((k-1) ln(1 - s/p) + (n-k) ln(1 + s/q)) ds over (0, p). The exponent is -βu - u²/2 - Σ eⱼuʲ in
+/// P(S ≥ k) / P(S = k) = (k/p) ∫ exp((k-1) ln(1 - s/p) + (n-k) ln(1 + s/q)) ds over (0, p). The exponent is -βu -
+/// u²/2 - Σ eⱼuʲ in
 /// units u of its own spread; the last sum is expanded, and the moments of exp(-βu - u²/2) follow from Mills' ratio.
 /// </remarks>
 static class CentralSeries
@@ -13,7 +15,8 @@ static class CentralSeries
     const int Cumulants = 12;
     const double RootTwoPi = 2.506628274631000502416;
 
-    /// <summary>P(S ≥ successes) / P(S = successes), where successes ≥ (trials + 1) · rate; null where the fraction is as quick.</summary>
+    /// <summary>P(S ≥ successes) / P(S = successes), where successes ≥ (trials + 1) · rate; null where the fraction
+    /// is as quick.</summary>
     public static double? TailOverMass(double successes, double failures, double rate, double other, double meanExcess)
     {
         double a = (successes - 1) / rate / rate;
@@ -29,7 +32,8 @@ static class CentralSeries
         return successes / rate * unit * Integral(weights, distance);
     }
 
-    // What three moments add is of one order of the spread; the first order left out is below 1e-15: 5.3 s⁴, 65 s⁶, 340 s⁷, 29,000 s¹⁰.
+    // What three moments add is of one order of the spread; the first order left out is below 1e-15: 5.3 s⁴, 65 s⁶,
+    // 340 s⁷, 29,000 s¹⁰.
     static int Terms(double spread) => spread < 1e-4 ? 10 : spread < 1e-3 ? 16 : spread < 0.002 ? 19 : 28;
 
     // j·eⱼ, then the coefficients of exp(-Σ eⱼuʲ) by m·wₘ = -Σ j·eⱼ·wₘ₋ⱼ.

@@ -1,7 +1,9 @@
 namespace Assize.Bounds;
 
-/// <summary>Logarithm and exponential that give the same bits on every system; Math.Log and Math.Exp do not promise that.</summary>
-/// <remarks>Only IEEE 754 additions, products, quotients and exponent shifts are used. Largest error seen: 1 unit in the last place.</remarks>
+/// <summary>Logarithm and exponential that give the same bits on every system; Math.Log and Math.Exp do not promise
+/// that.</summary>
+/// <remarks>Only IEEE 754 additions, products, quotients and exponent shifts are used. Largest error seen: 1 unit in
+/// the last place.</remarks>
 public static class Elementary
 {
     // The upper part has 21 trailing zero bits, so that its product with an exponent is exact.
@@ -125,8 +127,10 @@ public static class Elementary
         double r = upper - lower;
         double lost = upper - r - lower;
         double w = r * r;
-        double even = 1.0 / 2 + w * (1.0 / 24 + w * (1.0 / 720 + w * (1.0 / 40320 + w * (1.0 / 3628800 + w / 479001600))));
-        double odd = 1.0 / 6 + w * (1.0 / 120 + w * (1.0 / 5040 + w * (1.0 / 362880 + w * (1.0 / 39916800 + w / 6227020800))));
+        double even = 1.0 / 2
+            + w * (1.0 / 24 + w * (1.0 / 720 + w * (1.0 / 40320 + w * (1.0 / 3628800 + w / 479001600))));
+        double odd = 1.0 / 6
+            + w * (1.0 / 120 + w * (1.0 / 5040 + w * (1.0 / 362880 + w * (1.0 / 39916800 + w / 6227020800))));
         return r + (lost + w * (even + r * odd));
     }
 
@@ -134,7 +138,8 @@ public static class Elementary
 
     // 1/3 + z/5 + z²/7 + …
     static double ShortSeries(double z) =>
-        1.0 / 3 + z * (1.0 / 5 + z * (1.0 / 7 + z * (1.0 / 9 + z * (1.0 / 11 + z * (1.0 / 13 + z * (1.0 / 15 + z / 17))))));
+        1.0 / 3
+        + z * (1.0 / 5 + z * (1.0 / 7 + z * (1.0 / 9 + z * (1.0 / 11 + z * (1.0 / 13 + z * (1.0 / 15 + z / 17))))));
 
     static double LongSeries(double z)
     {

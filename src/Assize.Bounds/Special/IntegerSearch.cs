@@ -3,7 +3,8 @@ namespace Assize.Bounds;
 /// <summary>Where a condition that holds from some whole number on begins to hold.</summary>
 static class IntegerSearch
 {
-    /// <summary>The first number in [least, most] where the condition holds, or most + 1; quick when the guess is near.</summary>
+    /// <summary>The first number in [least, most] where the condition holds, or most + 1; quick when the guess is
+    /// near.</summary>
     public static long First(long least, long most, long guess, Func<long, bool> holds)
     {
         if (least > most)

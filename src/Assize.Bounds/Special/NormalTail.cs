@@ -96,7 +96,8 @@ public static class NormalTail
                 return point;
         }
 
-        throw new InvalidOperationException($"The normal quantile of e^{Check.Text(logarithm)} did not settle in {Cap} steps.");
+        throw new InvalidOperationException(
+            $"The normal quantile of e^{Check.Text(logarithm)} did not settle in {Cap} steps.");
     }
 
     // exp(-x²/2) with the square exact: at 37 its rounding alone would cost 1e-13.

@@ -22,7 +22,8 @@ public static class RootBracket
         double atUpper = function(upper);
         if (!(atLower <= 0 && atUpper >= 0) && !(atLower >= 0 && atUpper <= 0))
             throw new InvalidOperationException(
-                $"No change of sign between {Check.Text(lower)} ({Check.Text(atLower)}) and {Check.Text(upper)} ({Check.Text(atUpper)}).");
+                $"No change of sign between {Check.Text(lower)} ({Check.Text(atLower)}) "
+                + $"and {Check.Text(upper)} ({Check.Text(atUpper)}).");
 
         if (atLower == 0)
             return (lower, lower);
@@ -33,7 +34,9 @@ public static class RootBracket
                 return (lower, upper);
 
             // Every third step halves, so that the bracket closes whatever the function's shape.
-            double middle = i % 3 == 2 ? lower + (upper - lower) / 2 : Inside(lower, upper, atLower, atUpper, precision);
+            double middle = i % 3 == 2
+                ? lower + (upper - lower) / 2
+                : Inside(lower, upper, atLower, atUpper, precision);
             double atMiddle = function(middle);
             if (atMiddle > 0 == atLower > 0)
                 (lower, atLower) = (middle, atMiddle);
@@ -51,8 +54,6 @@ public static class RootBracket
         double width = upper - lower;
         double secant = lower + width * (atLower / (atLower - atUpper));
         double margin = Math.Min(width / 2, 0.5 * precision * Math.Max(Math.Abs(lower), Math.Abs(upper)));
-        return secant >= lower + margin && secant <= upper - margin
-            ? secant
-            : secant < lower + width / 2 ? lower + margin : secant > upper - margin ? upper - margin : lower + width / 2;
+        return double.IsNaN(secant) ? lower + width / 2 : Math.Max(lower + margin, Math.Min(upper - margin, secant));
     }
 }

@@ -3,7 +3,7 @@ namespace Assize.Bounds;
 /// <summary>What Stirling's formula for ln n! leaves out.</summary>
 static class StirlingError
 {
-    // ln n! - ln(√(2πn) (n/e)^n) for n = 1 … 15; Reference/generate.py recomputes them.
+    // ln n! - ln(√(2πn) (n/e)^n) for n = 1 … 15; `generate.py stirling` in the tests prints them.
     static readonly double[] Small =
     [
         double.NaN,
@@ -20,6 +20,7 @@ static class StirlingError
 
         double inverse = 1 / n;
         double z = inverse * inverse;
-        return inverse * (1.0 / 12 - z * (1.0 / 360 - z * (1.0 / 1260 - z * (1.0 / 1680 - z * (1.0 / 1188 - z * (691.0 / 360360))))));
+        double late = 1.0 / 1680 - z * (1.0 / 1188 - z * (691.0 / 360360));
+        return inverse * (1.0 / 12 - z * (1.0 / 360 - z * (1.0 / 1260 - z * late)));
     }
 }

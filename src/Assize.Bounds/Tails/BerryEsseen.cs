@@ -3,10 +3,12 @@ namespace Assize.Bounds;
 /// <summary>How far the sum of independent draws of one law may be from its normal approximation.</summary>
 /// <remarks>
 /// <para>Holds for: independent draws of one law with positive variance and a third absolute central moment.</para>
-/// <para>Guarantee: the true probability lies inside the enclosure, at every number of trials; it bounds from below too, so it can prove
+/// <para>Guarantee: the true probability lies inside the enclosure, at every number of trials; it bounds from below
+/// too, so it can prove
 /// a test flaky. The error is additive: nothing is said about probabilities far below 1/√trials.</para>
 /// <para>Accuracy: for yes/no draws the distance is 1.14 to 1.9 times the true one.</para>
-/// <para>Source: I. G. Shevtsova, Inform. Primen. 7 (2013) 124–125: min of 0.4690 r, 0.3322 (r + 0.429), 0.3031 (r + 0.646), over √trials,
+/// <para>Source: I. G. Shevtsova, Inform. Primen. 7 (2013) 124–125: min of 0.4690 r, 0.3322 (r + 0.429), 0.3031 (r +
+/// 0.646), over √trials,
 /// r the third absolute central moment over the cube of the standard deviation (the reference is from memory).</para>
 /// </remarks>
 public static class BerryEsseen
@@ -14,7 +16,8 @@ public static class BerryEsseen
     // Above the rounding of the standardised point, its normal tail and the distance.
     const double Rounding = 1e-10;
 
-    /// <summary>The greatest distance between the distribution function of the standardised sum and the normal one.</summary>
+    /// <summary>The greatest distance between the distribution function of the standardised sum and the normal
+    /// one.</summary>
     /// <param name="law">The law of one draw; its variance must be positive.</param>
     /// <param name="trials">Number of draws summed, at least 1.</param>
     /// <returns>The bound, in (0, 1], rounded up.</returns>
@@ -82,7 +85,10 @@ public static class BerryEsseen
 
         public override string Assumes => "independent trials of one rate";
 
-        public override long? TrialsNeeded(RateSide side, double miss)
+        public override long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides) =>
+            Greatest(sides, side => TrialsNeeded(side, plan.Miss));
+
+        static long? TrialsNeeded(RateSide side, double miss)
         {
             var (edge, defect) = (Law.Bernoulli(side.Edge), Law.Bernoulli(side.Defect));
             if (edge.Variance == 0 || defect.Variance == 0)

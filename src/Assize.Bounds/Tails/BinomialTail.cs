@@ -5,7 +5,8 @@ namespace Assize.Bounds;
 /// <para>Holds for: independent trials that succeed with the same rate.</para>
 /// <para>Guarantee: the true probability lies inside the enclosure, at every number of trials.</para>
 /// <para>Accuracy: the ends differ from the truth by at most 1.5e-12 of it while it is above 1e-300.</para>
-/// <para>Source: J. Bernoulli, Ars conjectandi (1713), part 1; evaluated after C. Loader, Fast and accurate computation of binomial
+/// <para>Source: J. Bernoulli, Ars conjectandi (1713), part 1; evaluated after C. Loader, Fast and accurate
+/// computation of binomial
 /// probabilities (2000), and A. R. Didonato and A. H. Morris, ACM Trans. Math. Softw. 18 (1992) 360–373.</para>
 /// </remarks>
 public static class BinomialTail
@@ -22,7 +23,9 @@ public static class BinomialTail
     /// <returns>An enclosure of P(S ≥ successes).</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Enclosure UpperTail(long trials, long successes, double rate) =>
-        Widened(Binomial.UpperTail(trials, successes, rate), known: successes <= 0 || successes > trials || rate is 0 or 1);
+        Widened(
+            Binomial.UpperTail(trials, successes, rate),
+            known: successes <= 0 || successes > trials || rate is 0 or 1);
 
     /// <summary>The probability of so many successes or fewer.</summary>
     /// <param name="trials">Number of trials, in [0, 2^52].</param>
@@ -31,7 +34,9 @@ public static class BinomialTail
     /// <returns>An enclosure of P(S ≤ successes).</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Enclosure LowerTail(long trials, long successes, double rate) =>
-        Widened(Binomial.LowerTail(trials, successes, rate), known: successes < 0 || successes >= trials || rate is 0 or 1);
+        Widened(
+            Binomial.LowerTail(trials, successes, rate),
+            known: successes < 0 || successes >= trials || rate is 0 or 1);
 
     /// <summary>The probability of a number of successes between two limits.</summary>
     /// <param name="trials">Number of trials, in [0, 2^52].</param>
@@ -88,7 +93,5 @@ public static class BinomialTail
         public override string Assumes => "independent trials of one rate";
 
         public override long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides) => plan.Trials;
-
-        public override long? TrialsNeeded(RateSide side, double miss) => new RateSearch(side, null, miss).LastFailing() + 1;
     }
 }

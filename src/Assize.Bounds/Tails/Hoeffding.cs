@@ -2,10 +2,13 @@ namespace Assize.Bounds;
 
 /// <summary>How far the average of independent values in a range may stray from its mean.</summary>
 /// <remarks>
-/// <para>Holds for: independent values in a known range; they need not share a distribution, only the average of their means counts.</para>
+/// <para>Holds for: independent values in a known range; they need not share a distribution, only the average of
+/// their means counts.</para>
 /// <para>Guarantee: at least the true probability, at every number of trials.</para>
-/// <para>Accuracy: within 1e-11 of the formula, rounded up; the formula itself is 6 to 15 times the probability for yes/no draws.</para>
-/// <para>Source: W. Hoeffding, J. Amer. Statist. Assoc. 58 (1963) 13–30, Theorem 1, (2.1) and (2.3), and Theorem 2.</para>
+/// <para>Accuracy: within 1e-11 of the formula, rounded up; the formula itself is 6 to 15 times the probability for
+/// yes/no draws.</para>
+/// <para>Source: W. Hoeffding, J. Amer. Statist. Assoc. 58 (1963) 13–30, Theorem 1, (2.1) and (2.3), and Theorem
+/// 2.</para>
 /// </remarks>
 public static class Hoeffding
 {
@@ -72,11 +75,13 @@ public static class Hoeffding
         return range * Math.Sqrt(-Elementary.Log(risk) / (2.0 * trials)) * (1 + Rounding);
     }
 
-    /// <summary>How many values the average needs so that a margin is exceeded to one side with no more than a given probability.</summary>
+    /// <summary>How many values the average needs so that a margin is exceeded to one side with no more than a given
+    /// probability.</summary>
     /// <param name="range">Greatest minus least possible value, in (0, ∞); same unit as the values.</param>
     /// <param name="margin">The distance from the mean, in (0, ∞); same unit as the values.</param>
     /// <param name="risk">The probability, in (0, 1).</param>
-    /// <returns>The first number, and every larger one, for which <see cref="Tail"/> is at most the risk; null beyond 1e15.</returns>
+    /// <returns>The first number, and every larger one, for which <see cref="Tail"/> is at most the risk; null beyond
+    /// 1e15.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static long? TrialsNeeded(double range, double margin, double risk)
     {
@@ -97,6 +102,7 @@ public static class Hoeffding
 
         public override string Assumes => "independent trials whose rates average to the claimed one";
 
-        public override long? TrialsNeeded(RateSide side, double miss) => ChernoffTrials.Ceiling(side, miss);
+        public override long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides) =>
+            Greatest(sides, side => ChernoffTrials.Ceiling(side, plan.Miss));
     }
 }

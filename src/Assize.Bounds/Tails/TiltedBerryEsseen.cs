@@ -1,11 +1,14 @@
 namespace Assize.Bounds;
 
-/// <summary>How often independent yes/no trials give so many successes, enclosed relative to the answer, however small it is.</summary>
+/// <summary>How often independent yes/no trials give so many successes, enclosed relative to the answer, however
+/// small it is.</summary>
 /// <remarks>
 /// <para>Holds for: independent trials that succeed with the same rate.</para>
 /// <para>Guarantee: the true probability lies inside the enclosure, at every number of trials, at equal cost.</para>
-/// <para>Accuracy: the ends are within 25 % of the truth once trials · rate · (1 - rate) is above 2,000, within 0.1 % at a thousand million trials.</para>
-/// <para>Source: H. Cramér, Actual. Sci. Ind. 736 (1938) 5–23, and R. R. Bahadur and R. Ranga Rao, Ann. Math. Statist. 31 (1960) 1015–1027,
+/// <para>Accuracy: the ends are within 25 % of the truth once trials · rate · (1 - rate) is above 2,000, within 0.1 %
+/// at a thousand million trials.</para>
+/// <para>Source: H. Cramér, Actual. Sci. Ind. 736 (1938) 5–23, and R. R. Bahadur and R. Ranga Rao, Ann. Math.
+/// Statist. 31 (1960) 1015–1027,
 /// for the tilt; its error after I. G. Shevtsova, Inform. Primen. 7 (2013) 124–125. The page gives the proof.</para>
 /// </remarks>
 public static class TiltedBerryEsseen
@@ -96,7 +99,10 @@ public static class TiltedBerryEsseen
 
         public override string Assumes => "independent trials of one rate";
 
-        public override long? TrialsNeeded(RateSide side, double miss)
+        public override long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides) =>
+            Greatest(sides, side => TrialsNeeded(side, plan.Miss));
+
+        static long? TrialsNeeded(RateSide side, double miss)
         {
             if (side.Edge is 0 or 1 || side.Defect is 0 or 1 || ChernoffTrials.Ceiling(side, miss) is not { } proven)
                 return null;

@@ -55,7 +55,8 @@ public class ProportionAssessmentTests
         Assert.Equal(0, ProportionAssessment.SmallestDefectCaught(100, 90, 100, 0.3, 0.9));
     }
 
-    // Exact sizes for |share - .5| ≥ .01 to have each probability from that size on, by exhaustive search over all sizes.
+    // Exact sizes for |share - .5| ≥ .01 to have each probability from that size on, by exhaustive search over all
+    // sizes.
     [Theory]
     [InlineData(0.49, 0.51, 0.5, 1e-2, 16_650)]
     [InlineData(0.49, 0.51, 0.5, 1e-4, 37_901)]

@@ -3,7 +3,8 @@ using System.Reflection.PortableExecutable;
 
 namespace Assize.Bounds.Tests.Conventions;
 
-/// <summary>The same call must give the same number in the editor, in the test run and in CI, on every system and in every culture.</summary>
+/// <summary>The same call must give the same number in the editor, in the test run and in CI, on every system and in
+/// every culture.</summary>
 public class BannedApiTests
 {
     static readonly string[] Banned =

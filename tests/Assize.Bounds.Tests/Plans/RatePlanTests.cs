@@ -181,7 +181,8 @@ public class RatePlanTests
         }
     }
 
-    // NIST/SEMATECH e-Handbook of Statistical Methods, 7.2.4.3 (from memory): 0.1 against 0.2 at 5 % and 10 %, 109 items, at most 16.
+    // NIST/SEMATECH e-Handbook of Statistical Methods, 7.2.4.3 (from memory): 0.1 against 0.2 at 5 % and 10 %, 109
+    // items, at most 16.
     [Fact]
     public void The_smallest_plan_of_a_handbook_example_is_found()
     {

@@ -49,7 +49,8 @@ public class RateTheoremTests
         Assert.Equal(20, seen);
     }
 
-    // The same search in 80 digits: columns n_chernoff_kl 2,044 and n_berry_esseen 879,844,000,001 of its table for .5, .1, 1e-6, 1e-3.
+    // The same search in 80 digits: columns n_chernoff_kl 2,044 and n_berry_esseen 879,844,000,001 of its table for
+    // .5, .1, 1e-6, 1e-3.
     [Fact]
     public void Chernoff_and_plain_Berry_Esseen_sizes_agree_with_an_independent_computation()
     {

@@ -2,7 +2,8 @@ namespace Assize.Bounds.Tests;
 
 public class ZeroFailuresTests
 {
-    // Common practice: 59 items without a failure show 95 % reliability at 95 % confidence, 299 show 99 %, 22 show 90 % at 90 %.
+    // Common practice: 59 items without a failure show 95 % reliability at 95 % confidence, 299 show 99 %, 22 show 90
+    // % at 90 %.
     [Theory]
     [InlineData(0.05, 0.05, 59)]
     [InlineData(0.01, 0.05, 299)]

@@ -1,5 +1,5 @@
 #!/usr/bin/env python3
-"""Recomputes a sample of every table here (`check`), or writes binomial_large.csv (`large`). Needs Debian's python3-mpmath."""
+"""Recomputes a sample of every table here (`check`), writes binomial_large.csv (`large`) or prints Stirling errors (`stirling`). Needs Debian's python3-mpmath."""
 import csv
 import sys
 from mpmath import mp, mpf, erfc, exp, log, log1p, quad, sqrt
@@ -106,5 +106,10 @@ def large():
                 print(f"{n},{k},{text},{mp.nstr(ln_upper_by_integral(n, k, p), 25)},{mp.nstr(ln_mass(n, k, p), 25)}")
 
 
+def stirling():
+    for n in range(1, 16):
+        print(n, repr(float(mp.loggamma(n + 1) - log(2 * mp.pi * n) / 2 - n * log(n) + n)))
+
+
 if __name__ == "__main__":
-    {"check": check, "large": large}[sys.argv[1]]()
+    {"check": check, "large": large, "stirling": stirling}[sys.argv[1]]()

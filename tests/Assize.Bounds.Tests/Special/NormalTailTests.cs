@@ -39,7 +39,8 @@ public class NormalTailTests
         Assert.Equal(245, seen);
     }
 
-    // M. Abramowitz and I. A. Stegun, Handbook of Mathematical Functions (1964), table 26.1 and, as -log10 Q(x), table 26.2 (from memory).
+    // M. Abramowitz and I. A. Stegun, Handbook of Mathematical Functions (1964), table 26.1 and, as -log10 Q(x),
+    // table 26.2 (from memory).
     [Theory]
     [InlineData(1, 0.158655253931457)]
     [InlineData(2, 0.022750131948179)]
