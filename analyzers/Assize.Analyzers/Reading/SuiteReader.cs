@@ -1,0 +1,75 @@
+using System.Collections.Immutable;
+using Microsoft.CodeAnalysis;
+using Microsoft.CodeAnalysis.Operations;
+
+namespace Assize.Analyzers;
+
+/// <summary>Reads one test method: every statistical assertion in it, each on its own.</summary>
+sealed class SuiteReader
+{
+    readonly TestMethods _tests;
+    readonly RandomTypes _types;
+
+    SuiteReader(TestMethods tests, RandomTypes types) => (_tests, _types) = (tests, types);
+
+    /// <summary>A reader for a compilation; null when it has no test framework.</summary>
+    public static SuiteReader? For(Compilation compilation) =>
+        TestMethods.In(compilation) is { } tests ? new SuiteReader(tests, new RandomTypes(compilation)) : null;
+
+    /// <summary>Whether a method can hold anything to read, told without looking at its operations.</summary>
+    public TestFramework? Admit(IMethodSymbol method, SyntaxNode body) =>
+        _tests.FrameworkOf(method) is { } framework && Gate.HasLoop(body) ? framework : null;
+
+    public ImmutableArray<AssertionReading> Read(
+        IMethodSymbol method, TestFramework framework, IOperation body, CancellationToken cancellation)
+    {
+        if (TestMethods.RunsOf(method, framework) is not { } runs)
+            return [];
+        var writes = new Writes(body);
+        var rows = TestMethods.RowsOf(method, framework);
+        var worst = new Dictionary<SyntaxNode, AssertionReading>();
+        foreach (DataRow? row in rows.IsEmpty ? [null] : rows.Cast<DataRow?>())
+        {
+            cancellation.ThrowIfCancellationRequested();
+            foreach (AssertionReading reading in ReadRow(method, framework, body, writes, row, runs, cancellation))
+                Keep(worst, reading);
+        }
+
+        return [.. worst.Values.OrderBy(reading => reading.Location.SourceSpan.Start)];
+    }
+
+    static void Keep(Dictionary<SyntaxNode, AssertionReading> worst, AssertionReading reading)
+    {
+        SyntaxNode site = reading.Location.SourceTree!.GetRoot().FindNode(reading.Location.SourceSpan);
+        if (!worst.TryGetValue(site, out var known) || known.FalseFailure.Upper < reading.FalseFailure.Upper)
+            worst[site] = reading;
+    }
+
+    IEnumerable<AssertionReading> ReadRow(
+        IMethodSymbol method, TestFramework framework, IOperation body, Writes writes, DataRow? row, Runs runs, CancellationToken cancellation)
+    {
+        var known = row?.Bind(method) ?? ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default);
+        var requirements = new List<Requirement>();
+        foreach (IOperation operation in body.Descendants())
+        {
+            var evaluator = new Evaluator(writes, known, cancellation);
+            var finder = new AssertionFinder(framework, evaluator, writes);
+            Requirement? requirement = operation switch
+            {
+                IInvocationOperation call => finder.Read(call),
+                IThrowOperation thrown => finder.Guarded(thrown),
+                _ => null,
+            };
+            if (requirement is { Condition: not (Term.Unknown or Term.Known) })
+                requirements.Add(requirement with { TookRoot = evaluator.TookRoot });
+        }
+
+        var subject = new Subject(writes, _types, new Evaluator(writes, known, cancellation), row, runs);
+        foreach (Requirement requirement in Pairing.Of(requirements))
+        {
+            cancellation.ThrowIfCancellationRequested();
+            if (subject.Read(requirement) is { } reading)
+                yield return reading;
+        }
+    }
+}
