@@ -30,8 +30,8 @@ sealed class ClaimReader
     {
         var evaluator = new Evaluator(
             new Writes(Body(made)), ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default), cancellation);
-        double? Number(IInvocationOperation call, string parameter) => Argument(call, parameter) is { } value
-            && evaluator.Read(value) is Term.Known known ? Arithmetic.Number(known.Value) : null;
+        double? Number(IOperation? value) =>
+            value is not null && evaluator.Read(value) is Term.Known known ? Arithmetic.Number(known.Value) : null;
 
         double risk = UsualRisk, confidence = UsualConfidence;
         IInvocationOperation? trialsCall = null;
@@ -39,10 +39,10 @@ sealed class ClaimReader
         {
             switch (term.TargetMethod.Name)
             {
-                case "WithRisk" when Number(term, "risk") is { } number:
+                case "WithRisk" when Number(ValueOf(term)) is { } number:
                     risk = number;
                     break;
-                case "WithConfidence" when Number(term, "confidence") is { } number:
+                case "WithConfidence" when Number(ValueOf(term)) is { } number:
                     confidence = number;
                     break;
                 case "WithRisk" or "WithConfidence":
@@ -60,26 +60,26 @@ sealed class ClaimReader
     }
 
     static ClaimReading? Reading(
-        IInvocationOperation made, IInvocationOperation? trialsCall, ClaimPlan plan, Func<IInvocationOperation, string, double?> number)
+        IInvocationOperation made, IInvocationOperation? trialsCall, ClaimPlan plan, Func<IOperation?, double?> number)
     {
         if (plan.Refusal is not null)
             return new ClaimReading(made.Syntax.GetLocation(), null, null, null, plan.Refusal);
-        if (trialsCall is null || number(trialsCall, "trials") is not { } trials || Argument(trialsCall, "trials") is not { } argument)
+        if (trialsCall is null || ValueOf(trialsCall) is not { } argument || number(argument) is not { } trials)
             return null;
         return new ClaimReading(argument.Syntax.GetLocation(), LiteralReader.Of(argument), (long)trials, plan.Needed, null);
     }
 
-    static Func<Edges>? EdgesOf(IInvocationOperation made, Func<IInvocationOperation, string, double?> number)
+    static Func<Edges>? EdgesOf(IInvocationOperation made, Func<IOperation?, double?> number)
     {
-        if (number(made, "target") is not { } target)
+        if (number(Argument(made, "target")) is not { } target)
             return null;
-        double? defect = number(made, "defect");
+        double? defect = number(Argument(made, "defect"));
         bool isDefault = made.Arguments.Any(argument => argument is { Parameter.Name: "defect", ArgumentKind: ArgumentKind.DefaultValue });
         if (made.TargetMethod.Name != "Rate")
             return defect is not { } distance ? null
                 : made.TargetMethod.Name == "RateAtLeast" ? () => Edges.AtLeast(Domain.Rate, target, distance)
                 : () => Edges.AtMost(Domain.Rate, target, distance);
-        if (number(made, "tolerance") is not { } tolerance || (defect is null && !isDefault))
+        if (number(Argument(made, "tolerance")) is not { } tolerance || (defect is null && !isDefault))
             return null;
         return () => Edges.Around(Domain.Rate, target, tolerance, defect);
     }
@@ -118,6 +118,10 @@ sealed class ClaimReader
     bool IsTerm(IMethodSymbol method) =>
         (_terms is not null && SymbolEqualityComparer.Default.Equals(method.ContainingType, _terms))
         || (method.ContainingType is { } type && type.ContainingNamespace?.Name == "Assize" && method.Name.StartsWith("With", StringComparison.Ordinal));
+
+    // The one value of a term: the claim itself comes first where the term is an extension.
+    static IOperation? ValueOf(IInvocationOperation term) =>
+        term.Arguments.FirstOrDefault(argument => argument.Parameter?.Ordinal == (term.Instance is null ? 1 : 0))?.Value;
 
     static IOperation? Argument(IInvocationOperation call, string parameter) =>
         call.Arguments.FirstOrDefault(argument => argument.Parameter?.Name == parameter)?.Value is { ConstantValue: not { HasValue: true, Value: null } } value

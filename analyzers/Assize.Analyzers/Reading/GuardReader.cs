@@ -18,7 +18,7 @@ sealed class GuardReader
         IOperation inner = site;
         foreach (IOperation outer in site.Around())
         {
-            if (loops.IsEmpty && outer is ILoopOperation or IMethodBodyOperation)
+            if (loops.IsEmpty && outer is ILoopOperation)
                 break;
             step = outer switch
             {

@@ -38,8 +38,10 @@ sealed class VariableReader
         Term value = start is null ? Parameter(variable) : _evaluator.Read(start.Value!);
         foreach (Write write in writes)
         {
-            if (write != start && MayComeBetween(write, start, startLoops, use, around))
-                value = Of(Operator.Add, KindOf(variable), value, Added(write, startLoops, around, KindOf(variable)));
+            if (write == start || !MayComeBetween(write, start, startLoops, use, around))
+                continue;
+            Term added = Added(write, startLoops, around, KindOf(variable));
+            value = IsZero(value) ? added : Of(Operator.Add, KindOf(variable), value, added);
         }
 
         return value;
