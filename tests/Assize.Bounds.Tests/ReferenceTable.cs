@@ -7,7 +7,8 @@ static class ReferenceTable
 {
     public static IEnumerable<Row> Rows(string name)
     {
-        string[] lines = [.. File.ReadLines(Path.Combine(AppContext.BaseDirectory, "Reference", $"{name}.csv")).Where(line => line[0] != '#')];
+        string path = Path.Combine(AppContext.BaseDirectory, "Reference", $"{name}.csv");
+        string[] lines = [.. File.ReadLines(path).Where(line => line[0] != '#')];
         string[] header = lines[0].Split(',');
         return lines.Skip(1).Select(line => new Row([.. header.Zip(line.Split(','))]));
     }
@@ -31,8 +32,10 @@ static class ReferenceTable
 
         public long Whole(string column) => long.Parse(Text(column), CultureInfo.InvariantCulture);
 
-        public decimal Decimal(string column) => decimal.Parse(Text(column), NumberStyles.Float, CultureInfo.InvariantCulture);
+        public decimal Decimal(string column) =>
+            decimal.Parse(Text(column), NumberStyles.Float, CultureInfo.InvariantCulture);
 
-        public override string ToString() => string.Join(", ", cells.Take(5).Select(cell => $"{cell.Name} {cell.Text}"));
+        public override string ToString() => string.Join(
+            ", ", cells.Take(5).Select(cell => $"{cell.Name} {cell.Text}"));
     }
 }

@@ -47,12 +47,15 @@ static class PublicApi
 
     static string Text(MemberInfo member) => member switch
     {
-        FieldInfo field => $"{field.Name} : {(field.IsLiteral ? $"const = {Value(field.GetRawConstantValue())} : " : "")}{Name(field.FieldType)}",
+        FieldInfo field => $"{field.Name} : {Constant(field)}{Name(field.FieldType)}",
         PropertyInfo property => $"{property.Name} : {Name(property.PropertyType)} {{ {string.Join(" ", Accessors(property))} }}",
-        MethodInfo method => $"{method.Name}{Generic(method)}({Parameters(method)}) : {(method.IsStatic ? "static " : "")}{Name(method.ReturnType)}",
+        MethodInfo method =>
+            $"{method.Name}{Generic(method)}({Parameters(method)}) : {(method.IsStatic ? "static " : "")}{Name(method.ReturnType)}",
         ConstructorInfo constructor => $"new({Parameters(constructor)})",
         _ => $"{member.Name} : {member.MemberType}",
     };
+
+    static string Constant(FieldInfo field) => field.IsLiteral ? $"const = {Value(field.GetRawConstantValue())} : " : "";
 
     static IEnumerable<string> Accessors(PropertyInfo property)
     {

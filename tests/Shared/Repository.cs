@@ -23,7 +23,9 @@ static class Repository
             File.WriteAllText(full, actual);
 
         Assert.True(File.Exists(full), $"{path} does not exist; run the tests with {Rewrite}=1 to write it.");
-        Assert.True(Read(path) == actual, $"{path} differs from the code; run the tests with {Rewrite}=1 and read the difference.\n{actual}");
+        Assert.True(
+            Read(path) == actual,
+            $"{path} differs from the code; run the tests with {Rewrite}=1 and read the difference.\n{actual}");
     }
 
     /// <summary>Compares, or rewrites, the lines between two markers of a page.</summary>

@@ -30,16 +30,25 @@ public class ProportionAssessmentTests
     {
         int seen = 0;
         foreach (var (trials, low, high, rate) in new[]
-            { (1000L, 251L, 349L, 0.3), (1000, 0, 349, 0.3), (1000, 251, 1000, 0.3), (20, 5, 15, 0.5), (100, 0, 3, 0.001), (100_000, 49_000, 51_500, 0.5) })
+            {
+                (1000L, 251L, 349L, 0.3), (1000, 0, 349, 0.3), (1000, 251, 1000, 0.3),
+                (20, 5, 15, 0.5), (100, 0, 3, 0.001), (100_000, 49_000, 51_500, 0.5),
+            })
         {
             foreach (double confidence in new[] { 0.5, 0.9, 0.999 })
             {
                 double shift = ProportionAssessment.SmallestDefectCaught(trials, low, high, rate, confidence)!.Value;
                 double miss = (double)(1 - (decimal)confidence);
-                Assert.True(BinomialTail.Between(trials, low, high, rate + shift).Lower <= miss, $"{trials} {low} {high} {confidence}");
-                Assert.True(BinomialTail.Between(trials, low, high, rate + shift * 0.999999).Upper > miss, $"{trials} {low} {high} {confidence}");
+                Assert.True(
+                    BinomialTail.Between(trials, low, high, rate + shift).Lower <= miss,
+                    $"{trials} {low} {high} {confidence}");
+                Assert.True(
+                    BinomialTail.Between(trials, low, high, rate + shift * 0.999999).Upper > miss,
+                    $"{trials} {low} {high} {confidence}");
                 double other = rate - shift * 0.999999;
-                Assert.True(other is < 0 or > 1 || BinomialTail.Between(trials, low, high, other).Upper > miss, $"{trials} {low} {high}: nearer");
+                Assert.True(
+                    other is < 0 or > 1 || BinomialTail.Between(trials, low, high, other).Upper > miss,
+                    $"{trials} {low} {high}: nearer");
                 seen++;
             }
         }
@@ -80,9 +89,13 @@ public class ProportionAssessmentTests
             {
                 long needed = ProportionAssessment.TrialsNeeded(new ProportionBand(low, high), rate, risk)!.Value;
                 for (int trials = (int)needed; trials < 2 * needed + 200 && trials < 1200; trials++)
-                    Assert.True(Red(trials, low, high, rate).CompareTo(risk) <= 0, $"{low} {high} {rate} {risk}: {trials} of {needed}");
+                    Assert.True(
+                        Red(trials, low, high, rate).CompareTo(risk) <= 0,
+                        $"{low} {high} {rate} {risk}: {trials} of {needed}");
 
-                Assert.True(needed == 1 || Red((int)needed - 1, low, high, rate) > risk, $"{low} {high} {rate} {risk}: {needed}");
+                Assert.True(
+                    needed == 1 || Red((int)needed - 1, low, high, rate) > risk,
+                    $"{low} {high} {rate} {risk}: {needed}");
                 seen++;
             }
         }

@@ -8,7 +8,8 @@ public class DocumentationTests
 {
     static readonly string[] Paragraphs = ["Holds for: ", "Guarantee: ", "Accuracy: ", "Source: "];
 
-    static string[] Theorems => [.. Repository.Files("src/Assize.Bounds/Tails", "*.cs").Select(file => Path.GetFileNameWithoutExtension(file)!)];
+    static string[] Theorems =>
+        [.. Repository.Files("src/Assize.Bounds/Tails", "*.cs").Select(file => Path.GetFileNameWithoutExtension(file)!)];
 
     [Fact]
     public void Every_theorem_says_what_it_holds_for_guarantees_measures_and_cites()
@@ -17,7 +18,8 @@ public class DocumentationTests
         int seen = 0;
         foreach (string theorem in Theorems)
         {
-            var member = documentation.Descendants("member").Single(item => item.Attribute("name")!.Value == $"T:Assize.Bounds.{theorem}");
+            var member = documentation.Descendants("member").Single(
+                item => item.Attribute("name")!.Value == $"T:Assize.Bounds.{theorem}");
             string[] paragraphs = [.. member.Descendants("para").Select(item => item.Value.Trim())];
             Assert.True(Misses(paragraphs) is null, $"{theorem}: {Misses(paragraphs)}");
             seen++;
@@ -43,16 +45,24 @@ public class DocumentationTests
     [Fact]
     public void Every_theorem_has_a_public_type_a_test_and_a_page_of_the_agreed_shape()
     {
-        string[] headings = ["## Statement", "## Holds for", "## Measured accuracy", "## Checked against", "## Source", "## When to prefer another"];
+        string[] headings =
+        [
+            "## Statement", "## Holds for", "## Measured accuracy", "## Checked against", "## Source",
+            "## When to prefer another",
+        ];
         int seen = 0;
         foreach (string theorem in Theorems)
         {
-            Assert.True(typeof(RatePlan).Assembly.GetType($"Assize.Bounds.{theorem}") is { IsPublic: true }, $"{theorem} is no public type");
+            Assert.True(
+                typeof(RatePlan).Assembly.GetType($"Assize.Bounds.{theorem}") is { IsPublic: true },
+                $"{theorem} is no public type");
             Assert.NotNull(typeof(DocumentationTests).Assembly.GetType($"Assize.Bounds.Tests.{theorem}Tests"));
             string page = Repository.Read($"src/docs/tails/{theorem}.md");
             Assert.StartsWith($"# {theorem}\n", page, StringComparison.Ordinal);
             int[] places = [.. headings.Select(heading => page.IndexOf($"\n{heading}\n", StringComparison.Ordinal))];
-            Assert.True(places.All(place => place > 0) && places.Order().SequenceEqual(places), $"{theorem}.md lacks or misplaces a heading");
+            Assert.True(
+                places.All(place => place > 0) && places.Order().SequenceEqual(places),
+                $"{theorem}.md lacks or misplaces a heading");
             seen++;
         }
 

@@ -10,7 +10,10 @@ public class PublicApiTests
         string surface = PublicApi.Of(typeof(RatePlan).Assembly);
 
         Assert.True(surface.Split('\n').Length > 80, surface);
-        Assert.Contains("Hoeffding.Radius(long trials, double range, double risk) : static double\n", surface, StringComparison.Ordinal);
+        Assert.Contains(
+            "Hoeffding.Radius(long trials, double range, double risk) : static double\n",
+            surface,
+            StringComparison.Ordinal);
         Repository.MustEqual("src/Assize.Bounds/PublicApi.txt", surface);
     }
 }

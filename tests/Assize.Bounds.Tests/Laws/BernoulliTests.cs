@@ -13,7 +13,8 @@ public class BernoulliTests
 
         Assert.Equal(rate, law.Mean);
         Assert.Equal(rate * Math.Pow(1 - rate, 2) + (1 - rate) * rate * rate, law.Variance, 1e-16);
-        Assert.Equal(rate * Math.Pow(1 - rate, 3) + (1 - rate) * Math.Pow(rate, 3), law.ThirdAbsoluteCentralMoment, 1e-16);
+        Assert.Equal(
+            rate * Math.Pow(1 - rate, 3) + (1 - rate) * Math.Pow(rate, 3), law.ThirdAbsoluteCentralMoment, 1e-16);
         Assert.Equal((0, 1), (law.Minimum, law.Maximum));
     }
 
@@ -30,7 +31,8 @@ public class BernoulliTests
     }
 
     [Fact]
-    public void The_cumulant_does_not_overflow() => Assert.Equal(1000 + Math.Log(0.3), Law.Bernoulli(0.3).LogMoment(1000), 1e-12);
+    public void The_cumulant_does_not_overflow() =>
+        Assert.Equal(1000 + Math.Log(0.3), Law.Bernoulli(0.3).LogMoment(1000), 1e-12);
 
     [Theory]
     [InlineData(0.3, 0.8)]

@@ -7,7 +7,8 @@ public class DecimalsTests
     [InlineData(0.9999, 0.0001)]
     [InlineData(0.999999999, 1e-9)]
     [InlineData(0.1, 0.9)]
-    public void The_complement_is_the_decimal_one(double value, double complement) => Assert.Equal(complement, Decimals.Complement(value));
+    public void The_complement_is_the_decimal_one(double value, double complement) =>
+        Assert.Equal(complement, Decimals.Complement(value));
 
     [Fact]
     public void The_complement_of_a_tiny_value_stays_below_one()
@@ -24,7 +25,9 @@ public class DecimalsTests
         {
             for (int b = 1; b < 10_000; b += 41)
             {
-                Assert.Equal((a + b) / 10_000.0, Decimals.Nearest(Decimals.Exact(a / 10_000.0)!.Value + Decimals.Exact(b / 10_000.0)!.Value));
+                Assert.Equal(
+                    (a + b) / 10_000.0,
+                    Decimals.Nearest(Decimals.Exact(a / 10_000.0)!.Value + Decimals.Exact(b / 10_000.0)!.Value));
                 seen++;
             }
         }

@@ -7,7 +7,9 @@ public class EdgesTests
     {
         var edges = Edges.Around(Domain.Rate, 0.5, tolerance: 0.05, defect: 0.1);
 
-        Assert.Equal((0.4, 0.45, 0.5, 0.55, 0.6), (edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect));
+        Assert.Equal(
+            (0.4, 0.45, 0.5, 0.55, 0.6),
+            (edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect));
     }
 
     [Fact]
@@ -36,7 +38,9 @@ public class EdgesTests
     {
         var edges = Edges.Around(Domain.Rate, target, tolerance, defect);
 
-        Assert.Equal((lowerDefect, lower, upper, upperDefect), (edges.LowerDefect, edges.LowerEdge, edges.UpperEdge, edges.UpperDefect));
+        Assert.Equal(
+            (lowerDefect, lower, upper, upperDefect),
+            (edges.LowerDefect, edges.LowerEdge, edges.UpperEdge, edges.UpperDefect));
     }
 
     [Fact]
@@ -59,7 +63,8 @@ public class EdgesTests
     {
         var edges = Edges.Around(Domain.Rate, 0.001, 0, 0.2);
 
-        Assert.Equal((null, 0.001, 0.001, 0.201), (edges.LowerDefect, edges.LowerEdge, edges.UpperEdge, edges.UpperDefect));
+        Assert.Equal(
+            (null, 0.001, 0.001, 0.201), (edges.LowerDefect, edges.LowerEdge, edges.UpperEdge, edges.UpperDefect));
     }
 
     [Theory]
@@ -87,10 +92,13 @@ public class EdgesTests
                 continue;
 
             var edges = Edges.Around(Domain.Rate, target, tolerance, defect);
-            double[] order = [.. new[] { edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect }.OfType<double>()];
+            double?[] all = [edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect];
+            double[] order = [.. all.OfType<double>()];
             Assert.Equal(order.Order(), order);
-            Assert.True(edges.LowerDefect is null || edges.LowerDefect < edges.LowerEdge, $"{target} {tolerance} {defect}");
-            Assert.True(edges.UpperDefect is null || edges.UpperDefect > edges.UpperEdge, $"{target} {tolerance} {defect}");
+            Assert.True(
+                edges.LowerDefect is null || edges.LowerDefect < edges.LowerEdge, $"{target} {tolerance} {defect}");
+            Assert.True(
+                edges.UpperDefect is null || edges.UpperDefect > edges.UpperEdge, $"{target} {tolerance} {defect}");
             Assert.All(order, edge => Assert.InRange(edge, 0, 1));
             seen++;
         }
@@ -115,7 +123,8 @@ public class EdgesTests
     [InlineData(0.5, 0, 1e-17, "cannot be told", "1E-17")]
     [InlineData(0.5, 0.1, 0.10000000000000002, "cannot be told", "0.10000000000000002")]
     [InlineData(0.5, 0, 5e-324, "cannot be told", "5E-324")]
-    public void Nonsense_is_refused_by_name_and_value(double target, double tolerance, double defect, string name, string value)
+    public void Nonsense_is_refused_by_name_and_value(
+        double target, double tolerance, double defect, string name, string value)
     {
         string message = Assert.Throws<ClaimRefusedException>(() => Edges.Around(Domain.Rate, target, tolerance, defect)).Message;
 
@@ -124,8 +133,12 @@ public class EdgesTests
     }
 
     [Fact]
-    public void A_tolerance_of_zero_needs_a_defect() => Assert.Contains(
-        "explicit defect", Assert.Throws<ClaimRefusedException>(() => Edges.Around(Domain.Rate, 0.5, 0)).Message, StringComparison.Ordinal);
+    public void A_tolerance_of_zero_needs_a_defect()
+    {
+        var refused = Assert.Throws<ClaimRefusedException>(() => Edges.Around(Domain.Rate, 0.5, 0));
+
+        Assert.Contains("explicit defect", refused.Message, StringComparison.Ordinal);
+    }
 
     [Theory]
     [InlineData(0.3, 0.4)]
@@ -150,7 +163,8 @@ public class EdgesTests
         var tiny = Edges.Around(Domain.Any, 0, 5e-324, 1e-323);
 
         Assert.Equal((9e299, 1.1e300), (huge.LowerDefect, huge.UpperDefect));
-        Assert.Equal((-1e-323, -5e-324, 5e-324, 1e-323), (tiny.LowerDefect, tiny.LowerEdge, tiny.UpperEdge, tiny.UpperDefect));
+        Assert.Equal(
+            (-1e-323, -5e-324, 5e-324, 1e-323), (tiny.LowerDefect, tiny.LowerEdge, tiny.UpperEdge, tiny.UpperDefect));
     }
 
     [Fact]
@@ -177,7 +191,9 @@ public class EdgesTests
     {
         var edges = Edges.Between(Domain.Rate, 0.3, 0.1, 0.25, 0.4, 0.8);
 
-        Assert.Equal((0.1, 0.25, 0.3, 0.4, 0.8), (edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect));
+        Assert.Equal(
+            (0.1, 0.25, 0.3, 0.4, 0.8),
+            (edges.LowerDefect, edges.LowerEdge, edges.Target, edges.UpperEdge, edges.UpperDefect));
     }
 
     [Fact]
@@ -196,9 +212,11 @@ public class EdgesTests
     [InlineData(0.1, 0.2, 0.4, double.NaN)]
     [InlineData(0.1, double.NaN, 0.4, 0.6)]
     [InlineData(-0.1, 0.2, 0.4, 1.6)]
-    public void Four_numbers_out_of_order_are_refused(double lowerDefect, double lower, double upper, double upperDefect)
+    public void Four_numbers_out_of_order_are_refused(
+        double lowerDefect, double lower, double upper, double upperDefect)
     {
-        Assert.Throws<ClaimRefusedException>(() => Edges.Between(Domain.Rate, 0.3, lowerDefect, lower, upper, upperDefect));
+        Assert.Throws<ClaimRefusedException>(
+            () => Edges.Between(Domain.Rate, 0.3, lowerDefect, lower, upper, upperDefect));
         Assert.Throws<ClaimRefusedException>(() => Edges.Between(Domain.Rate, 0.3, 0.1, null, null, null));
         Assert.Throws<ClaimRefusedException>(() => Edges.Between(Domain.Rate, 0.3, null, 0.2, 0.4, null));
     }

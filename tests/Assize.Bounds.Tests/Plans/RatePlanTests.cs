@@ -88,11 +88,13 @@ public class RatePlanTests
         var edges = Of(lowerDefect, lower, upper, upperDefect);
         var plan = RatePlan.For(edges, risk, confidence);
         int most = (int)(3 * plan.Trials);
-        bool[] works = [.. Enumerable.Range(1, most).Select(trials => WorksExactly(edges, risk, (double)(1 - (decimal)confidence), trials))];
+        double miss = (double)(1 - (decimal)confidence);
+        bool[] works = [.. Enumerable.Range(1, most).Select(trials => WorksExactly(edges, risk, miss, trials))];
 
         Assert.Equal(Array.IndexOf(works, true) + 1, plan.FirstTrials);
         Assert.Equal(Array.LastIndexOf(works, false) + 2, plan.Trials);
-        Assert.All(Enumerable.Range(1, most), trials => Assert.Equal(works[trials - 1], plan.LimitsAt(trials).MeetsBoth));
+        Assert.All(
+            Enumerable.Range(1, most), trials => Assert.Equal(works[trials - 1], plan.LimitsAt(trials).MeetsBoth));
     }
 
     // Edges of sixty-fourths; asymmetric ones are laid around a target that lies between them.
@@ -104,7 +106,8 @@ public class RatePlanTests
             return Edges.AtMost(Domain.Rate, upper.Value / 64.0, (upperDefect!.Value - upper.Value) / 64.0);
 
         return Edges.Between(
-            Domain.Rate, (lower.Value + upper.Value) / 128.0, lowerDefect / 64.0, lower.Value / 64.0, upper.Value / 64.0, upperDefect / 64.0);
+            Domain.Rate, (lower.Value + upper.Value) / 128.0,
+            lowerDefect / 64.0, lower.Value / 64.0, upper.Value / 64.0, upperDefect / 64.0);
     }
 
     static bool WorksExactly(Edges edges, double risk, double miss, int trials)
@@ -149,10 +152,12 @@ public class RatePlanTests
             if (plan.Trials > 4000)
                 continue;
 
-            bool[] works = [.. Enumerable.Range(1, (int)(1.6 * plan.Trials) + 20).Select(trials => plan.LimitsAt(trials).MeetsBoth)];
+            var all = Enumerable.Range(1, (int)(1.6 * plan.Trials) + 20);
+            bool[] works = [.. all.Select(trials => plan.LimitsAt(trials).MeetsBoth)];
+            var (first, from) = (Array.IndexOf(works, true) + 1, Array.LastIndexOf(works, false) + 2);
             Assert.True(
-                (Array.IndexOf(works, true) + 1, Array.LastIndexOf(works, false) + 2) == (plan.FirstTrials, plan.Trials),
-                $"{edges} {risk:R} {confidence:R}: {Array.IndexOf(works, true) + 1}, {Array.LastIndexOf(works, false) + 2} against {plan.FirstTrials}, {plan.Trials}");
+                (first, from) == (plan.FirstTrials, plan.Trials),
+                $"{edges} {risk:R} {confidence:R}: {first}, {from} against {plan.FirstTrials}, {plan.Trials}");
             largest = Math.Max(largest, (int)plan.Trials);
             claims++;
         }
@@ -196,7 +201,8 @@ public class RatePlanTests
     [Theory]
     [InlineData(0.5, 1e-10, 2562)]
     [InlineData(0.01, 1e-10, 14113)]
-    public void A_reserved_tenth_of_the_default_risk_sizes_as_the_exhaustive_search_did(double target, double risk, long first)
+    public void A_reserved_tenth_of_the_default_risk_sizes_as_the_exhaustive_search_did(
+        double target, double risk, long first)
     {
         var edges = target == 0.5 ? Edges.Around(Domain.Rate, 0.5, 0, 0.1) : Edges.AtMost(Domain.Rate, target, 0.01);
 

@@ -19,7 +19,8 @@ public class RateSideTests
             {
                 double smoothed = side.SmoothedMiss(trials, 0.01);
                 double missed = side.Missed(trials, side.Limit(trials));
-                Assert.True(smoothed <= previous * (1 + 1e-10), $"{upper} {edge} {trials}: {smoothed:R} after {previous:R}");
+                Assert.True(
+                    smoothed <= previous * (1 + 1e-10), $"{upper} {edge} {trials}: {smoothed:R} after {previous:R}");
                 Assert.True(smoothed <= missed * (1 + 1e-10));
                 sawteeth += missed > plain ? 1 : 0;
                 (previous, plain) = (smoothed, missed);
@@ -44,7 +45,9 @@ public class RateSideTests
                 {
                     double hazard = side.Hazard(trials, limit) * (1 - 1e-10);
                     Assert.True(hazard <= side.Hazard(trials, limit + 1), $"{edge} {trials} {limit}");
-                    Assert.True(side.Hazard(trials + 1, limit) * (1 - 1e-10) <= side.Hazard(trials, limit), $"{edge} {trials} {limit}");
+                    Assert.True(
+                        side.Hazard(trials + 1, limit) * (1 - 1e-10) <= side.Hazard(trials, limit),
+                        $"{edge} {trials} {limit}");
                     Assert.True(hazard <= side.Hazard(trials + 1, limit + 1), $"{edge} {trials} {limit}");
                     seen++;
                 }

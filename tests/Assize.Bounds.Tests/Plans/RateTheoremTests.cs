@@ -16,7 +16,9 @@ public class RateTheoremTests
     {
         var theorems = RatePlan.For(Edges.Around(Domain.Rate, 0.5, 0, 0.1), 1e-6, 0.999).Theorems;
 
-        Assert.Equal(["exact binomial", "tilted Berry–Esseen", "Hoeffding", "Berry–Esseen"], theorems.Select(theorem => theorem.Name));
+        Assert.Equal(
+            ["exact binomial", "tilted Berry–Esseen", "Hoeffding", "Berry–Esseen"],
+            theorems.Select(theorem => theorem.Name));
         Assert.All(theorems, theorem => Assert.NotEmpty(theorem.Assumes));
     }
 
@@ -57,7 +59,8 @@ public class RateTheoremTests
         var theorems = RatePlan.For(Edges.Around(Domain.Rate, 0.5, 0, 0.1), 1e-6, 0.999).Theorems;
 
         Assert.Equal(2_044, theorems.Single(theorem => theorem.Name == "Hoeffding").Trials);
-        Assert.Equal(1, theorems.Single(theorem => theorem.Name == "Berry–Esseen").Trials!.Value / 879_844_000_001.0, 1e-6);
+        Assert.Equal(
+            1, theorems.Single(theorem => theorem.Name == "Berry–Esseen").Trials!.Value / 879_844_000_001.0, 1e-6);
     }
 
     [Fact]

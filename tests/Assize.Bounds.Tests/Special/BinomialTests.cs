@@ -71,7 +71,8 @@ public class BinomialTests
     [InlineData(1_000_000_000, 1, 1e-9)]
     [InlineData(1_000_000_000, 500_000_000, 0.5)]
     public void Both_tails_add_up(long trials, long successes, double rate) =>
-        Assert.Equal(1, Binomial.LowerTail(trials, successes - 1, rate) + Binomial.UpperTail(trials, successes, rate), 1e-12);
+        Assert.Equal(
+            1, Binomial.LowerTail(trials, successes - 1, rate) + Binomial.UpperTail(trials, successes, rate), 1e-12);
 
     [Fact]
     public void Counts_and_rates_at_the_ends_are_exact()
@@ -114,13 +115,15 @@ public class BinomialTests
     static void AssertLog(double computed, double truth, ReferenceTable.Row row)
     {
         double allowed = Accuracy * Math.Max(Math.Min(1, Math.Abs(truth)), Math.Abs(truth) / 690);
-        Assert.True(computed == truth || Math.Abs(computed - truth) <= allowed, $"{row}: {computed:R} against {truth:R}");
+        Assert.True(
+            computed == truth || Math.Abs(computed - truth) <= allowed, $"{row}: {computed:R} against {truth:R}");
     }
 
     static void AssertSame(double probability, double logarithm, ReferenceTable.Row row)
     {
         if (logarithm > -690)
-            Assert.True(ReferenceTable.RelativeError(probability, Math.Exp(logarithm)) < 1e-12, $"{row}: {probability:R}");
+            Assert.True(
+                ReferenceTable.RelativeError(probability, Math.Exp(logarithm)) < 1e-12, $"{row}: {probability:R}");
         else
             Assert.True(probability <= 1e-299, $"{row}: {probability:R}");
     }

@@ -12,7 +12,8 @@ public class CentralSeriesTests
         while (seen < 2000)
         {
             long trials = (long)Math.Pow(10, 4 + 5 * random.NextDouble());
-            double rate = random.Next(2) == 0 ? 0.001 + 0.998 * random.NextDouble() : Math.Pow(10, -4 * random.NextDouble() - 0.01);
+            double rate = random.Next(2) == 0 ? 0.001 + 0.998 * random.NextDouble() : Math.Pow(
+                10, -4 * random.NextDouble() - 0.01);
             double deviation = Math.Sqrt(trials * rate * (1 - rate));
             long successes = (long)Math.Ceiling((trials + 1) * rate + 1.3 * random.NextDouble() * deviation);
             double excess = BinomialPoint.MeanExcess(trials, successes, rate);
@@ -33,7 +34,9 @@ public class CentralSeriesTests
     [InlineData(1_000_000, 500_600, true)]
     [InlineData(1_000_000, 500_650, false)]
     public void It_is_used_near_the_centre_of_a_wide_distribution_only(long trials, long successes, bool used) =>
-        Assert.Equal(used, CentralSeries.TailOverMass(successes, trials - successes, 0.5, 0.5, trials / 2 - successes) is not null);
+        Assert.Equal(
+            used,
+            CentralSeries.TailOverMass(successes, trials - successes, 0.5, 0.5, trials / 2 - successes) is not null);
 
     [Theory]
     [InlineData(1_000_000_000, 500_000_001)]

@@ -27,7 +27,9 @@ public class ElementaryTests
             foreach (double signed in new[] { x, -x })
             {
                 decimal exact = (decimal)signed;
-                AssertUlps((double)Series(exact, (term, n) => -term * exact * (n - 1) / n), Elementary.LogOnePlus((double)exact));
+                AssertUlps(
+                    (double)Series(exact, (term, n) => -term * exact * (n - 1) / n),
+                    Elementary.LogOnePlus((double)exact));
                 AssertUlps((double)Series(exact, (term, n) => term * exact / n), Elementary.ExpMinusOne((double)exact));
                 seen++;
             }
@@ -50,7 +52,9 @@ public class ElementaryTests
     public void One_undoes_the_other_on_both_sides_of_every_crossing()
     {
         foreach (double value in new[] { -0.999, -0.51, -0.49, -0.29, -0.2899, 0.4099, 0.41, 0.99, 1.01, 50, 1e10, 1e16, 1e300 })
-            Assert.True(ReferenceTable.RelativeError(Elementary.ExpMinusOne(Elementary.LogOnePlus(value)), value) < 1e-13, $"{value}");
+            Assert.True(
+                ReferenceTable.RelativeError(Elementary.ExpMinusOne(Elementary.LogOnePlus(value)), value) < 1e-13,
+                $"{value}");
     }
 
     [Fact]

@@ -33,5 +33,6 @@ public class IntegerSearchTests
     }
 
     [Fact]
-    public void An_empty_range_is_past_at_once() => Assert.Equal(6, IntegerSearch.First(7, 5, 6, _ => throw new InvalidOperationException()));
+    public void An_empty_range_is_past_at_once() =>
+        Assert.Equal(6, IntegerSearch.First(7, 5, 6, _ => throw new InvalidOperationException()));
 }

@@ -15,7 +15,8 @@ public class NormalTailTests
         {
             double z = row.Number("z");
             AssertClose(NormalTail.LogUpper(z), row.Number("ln_phibar"), row);
-            AssertClose(NormalTail.LogUpper(-z), row.Number("phi_cdf") == 1 ? 0 : Math.Log(row.Number("phi_cdf")), row, 1e-16);
+            // The logarithm of a number near 1 keeps few of its digits.
+            Assert.Equal(Math.Log(row.Number("phi_cdf")), NormalTail.LogUpper(-z), 2e-16);
             if (row.Number("phibar") > 1e-300)
                 AssertClose(NormalTail.Upper(z), row.Number("phibar"), row);
 
@@ -97,7 +98,6 @@ public class NormalTailTests
         Assert.Equal((0, 1), (NormalTail.Upper(double.PositiveInfinity), NormalTail.Upper(double.NegativeInfinity)));
     }
 
-    static void AssertClose(double computed, double truth, ReferenceTable.Row? row, double accuracy = Accuracy) =>
-        Assert.True(ReferenceTable.RelativeError(computed, truth) <= Accuracy || Math.Abs(computed - truth) <= (accuracy < Accuracy ? accuracy : 0)
-            || ReferenceTable.RelativeError(computed, truth) <= accuracy, $"{row}: {computed:R} against {truth:R}");
+    static void AssertClose(double computed, double truth, ReferenceTable.Row? row, double accuracy = Accuracy) => Assert.True(
+        ReferenceTable.RelativeError(computed, truth) <= accuracy, $"{row}: {computed:R} against {truth:R}");
 }

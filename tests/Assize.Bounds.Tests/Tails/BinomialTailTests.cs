@@ -19,8 +19,10 @@ public class BinomialTailTests
                 for (int successes = -1; successes <= trials + 1; successes++)
                 {
                     string at = $"{trials} {successes} {rate:R}";
-                    AssertHolds(BinomialTail.UpperTail(trials, successes, rate), p => exact.CompareAtLeast(successes, p), at);
-                    AssertHolds(BinomialTail.LowerTail(trials, successes, rate), p => exact.CompareAtMost(successes, p), at);
+                    AssertHolds(
+                        BinomialTail.UpperTail(trials, successes, rate), p => exact.CompareAtLeast(successes, p), at);
+                    AssertHolds(
+                        BinomialTail.LowerTail(trials, successes, rate), p => exact.CompareAtMost(successes, p), at);
                     seen += 2;
                 }
             }
@@ -43,8 +45,10 @@ public class BinomialTailTests
                     for (int high = low; high <= trials; high += 3)
                     {
                         string at = $"{trials} {low} {high} {rate:R}";
-                        AssertHolds(BinomialTail.Between(trials, low, high, rate), p => exact.CompareBetween(low, high, p), at);
-                        AssertHolds(BinomialTail.Outside(trials, low, high, rate), p => exact.CompareOutside(low, high, p), at);
+                        AssertHolds(
+                            BinomialTail.Between(trials, low, high, rate), p => exact.CompareBetween(low, high, p), at);
+                        AssertHolds(
+                            BinomialTail.Outside(trials, low, high, rate), p => exact.CompareOutside(low, high, p), at);
                         seen++;
                     }
                 }

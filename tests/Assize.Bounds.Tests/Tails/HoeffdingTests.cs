@@ -22,7 +22,8 @@ public class HoeffdingTests
                         ? Hoeffding.UpperTail(trials, level, rate).Upper
                         : Hoeffding.LowerTail(trials, level, rate).Upper;
                     double plain = Hoeffding.Tail(trials, 1, Math.Abs(level - rate)).Upper;
-                    Assert.True((above ? exact.CompareAtLeast(successes, bound) : exact.CompareAtMost(successes, bound)) <= 0);
+                    Assert.True(
+                        (above ? exact.CompareAtLeast(successes, bound) : exact.CompareAtMost(successes, bound)) <= 0);
                     Assert.True(bound <= plain * (1 + 1e-11), $"{trials} {successes} {rate}");
                     seen++;
                 }
@@ -60,14 +61,17 @@ public class HoeffdingTests
         if (truth < -690)
             Assert.True(bound.Upper <= 1e-299, $"{row}");
         else
-            Assert.True(Math.Abs(Math.Log(bound.Upper) - truth) <= accuracy, $"{row}: {bound.Upper:R} against e^{truth:R}");
+            Assert.True(
+                Math.Abs(Math.Log(bound.Upper) - truth) <= accuracy, $"{row}: {bound.Upper:R} against e^{truth:R}");
     }
 
     [Fact]
     public void Its_page_states_how_far_above_the_exact_tail_it_is()
     {
-        var text = new System.Text.StringBuilder("| trials | rate | successes | exact | bound | ratio |\n| --: | --: | --: | --: | --: | --: |\n");
-        foreach (var (trials, rate, successes) in new[] { (100, 0.5, 65), (10_000, 0.5, 5_300), (10_000, 0.01, 160), (1_000_000, 0.01, 10_600) })
+        var text = new System.Text.StringBuilder(
+            "| trials | rate | successes | exact | bound | ratio |\n| --: | --: | --: | --: | --: | --: |\n");
+        foreach (var (trials, rate, successes) in new[]
+            { (100, 0.5, 65), (10_000, 0.5, 5_300), (10_000, 0.01, 160), (1_000_000, 0.01, 10_600) })
         {
             double exact = BinomialTail.UpperTail(trials, successes, rate).Upper;
             double bound = Hoeffding.UpperTail(trials, successes / (double)trials, rate).Upper;
@@ -103,7 +107,8 @@ public class HoeffdingTests
     }
 
     [Fact]
-    public void A_margin_too_small_for_any_machine_has_no_number() => Assert.Null(Hoeffding.TrialsNeeded(1, 1e-9, 1e-9));
+    public void A_margin_too_small_for_any_machine_has_no_number() =>
+        Assert.Null(Hoeffding.TrialsNeeded(1, 1e-9, 1e-9));
 
     [Fact]
     public void Arguments_outside_the_domain_are_refused()

@@ -19,8 +19,10 @@ public class TiltedBerryEsseenTests
                     var upper = TiltedBerryEsseen.UpperTail(trials, successes, rate);
                     var lower = TiltedBerryEsseen.LowerTail(trials, successes, rate);
                     string at = $"{trials} {successes} {rate} {upper} {lower}";
-                    Assert.True(exact.CompareAtLeast(successes, upper.Lower) >= 0 && exact.CompareAtLeast(successes, upper.Upper) <= 0, at);
-                    Assert.True(exact.CompareAtMost(successes, lower.Lower) >= 0 && exact.CompareAtMost(successes, lower.Upper) <= 0, at);
+                    Assert.True(exact.CompareAtLeast(successes, upper.Lower) >= 0, at);
+                    Assert.True(exact.CompareAtLeast(successes, upper.Upper) <= 0, at);
+                    Assert.True(exact.CompareAtMost(successes, lower.Lower) >= 0, at);
+                    Assert.True(exact.CompareAtMost(successes, lower.Upper) <= 0, at);
                     seen += 2;
                 }
             }
@@ -50,15 +52,21 @@ public class TiltedBerryEsseenTests
             return;
 
         double truth = Math.Exp(logarithm);
-        Assert.True(enclosure.Lower <= truth * (1 + 1e-12) && truth <= enclosure.Upper * (1 + 1e-12), $"{row}: {enclosure}, {truth:R}");
+        Assert.True(
+            enclosure.Lower <= truth * (1 + 1e-12) && truth <= enclosure.Upper * (1 + 1e-12),
+            $"{row}: {enclosure}, {truth:R}");
     }
 
     [Fact]
     public void Its_page_states_how_near_the_ends_are()
     {
-        var text = new System.Text.StringBuilder("| trials | rate | successes | at least | exact | at most |\n| --: | --: | --: | --: | --: | --: |\n");
+        var text = new System.Text.StringBuilder(
+            "| trials | rate | successes | at least | exact | at most |\n| --: | --: | --: | --: | --: | --: |\n");
         foreach (var (trials, rate, successes) in new[]
-            { (100, 0.5, 80), (1_000, 0.01, 32), (10_000, 0.5, 5_300), (100_000, 0.3, 30_900), (1_000_000, 0.01, 10_600), (1_000_000_000, 0.5, 500_095_000) })
+            {
+                (100, 0.5, 80), (1_000, 0.01, 32), (10_000, 0.5, 5_300), (100_000, 0.3, 30_900),
+                (1_000_000, 0.01, 10_600), (1_000_000_000, 0.5, 500_095_000),
+            })
         {
             var tail = TiltedBerryEsseen.UpperTail(trials, successes, rate);
             double exact = BinomialTail.UpperTail(trials, successes, rate).Upper;
