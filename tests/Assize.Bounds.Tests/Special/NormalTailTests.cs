@@ -16,7 +16,7 @@ public class NormalTailTests
             double z = row.Number("z");
             AssertClose(NormalTail.LogUpper(z), row.Number("ln_phibar"), row);
             // The logarithm of a number near 1 keeps few of its digits.
-            Assert.Equal(Math.Log(row.Number("phi_cdf")), NormalTail.LogUpper(-z), 2e-16);
+            Assert.Equal(Math.Log(row.Number("phi_cdf")), NormalTail.LogUpper(-z), 5e-16);
             if (row.Number("phibar") > 1e-300)
                 AssertClose(NormalTail.Upper(z), row.Number("phibar"), row);
 
