@@ -1,1 +1,3 @@
-return 0;
+using Assize.Cli;
+
+return await CommandLine.InvokeAsync(args, Desk.OfThisProcess());

@@ -1,0 +1,23 @@
+namespace Bicycles.NUnit;
+
+public class RetryJitterTests
+{
+    readonly RetryJitter jitter = new(first: TimeSpan.FromSeconds(1), longest: TimeSpan.FromMinutes(1));
+
+    [TestCase(0)]
+    [TestCase(3)]
+    [TestCase(30)]
+    public void Half_of_the_waits_end_in_the_first_half_of_the_window(int attempt) =>
+        Claim.Rate(0.5, tolerance: 0.01).MustHold(rng => jitter.Wait(attempt, rng) < jitter.Window(attempt) / 2);
+
+    [Test]
+    public void Both_ends_of_the_window_are_used_alike() => Assert.Multiple(() =>
+    {
+        Claim.Rate(0.1, tolerance: 0.005).MustHold(rng => jitter.Wait(2, rng) < 0.1 * jitter.Window(2));
+        Claim.Rate(0.1, tolerance: 0.005).MustHold(rng => jitter.Wait(2, rng) > 0.9 * jitter.Window(2));
+    });
+
+    [Test]
+    public void No_wait_outlasts_its_window() =>
+        Claim.RateAtMost(0, defect: 1e-4).MustHold(rng => jitter.Wait(5, rng) > jitter.Window(5));
+}

@@ -1,0 +1,20 @@
+namespace Bicycles.Xunit;
+
+public class RepairRotaTests
+{
+    [Fact]
+    public void Every_bicycle_is_first_equally_often() =>
+        Claim.Rate(1 / 7.0, tolerance: 0, defect: 0.01).MustHold(rng => RepairRota.Draw(7, rng)[0] == 3);
+
+    [Fact]
+    public void Neighbours_keep_their_order_half_of_the_time() =>
+        Claim.Rate(0.5, tolerance: 0, defect: 0.01).MustHold(rng =>
+        {
+            var rota = RepairRota.Draw(7, rng);
+            return Array.IndexOf(rota, 2) < Array.IndexOf(rota, 3);
+        });
+
+    [Fact]
+    public void One_bicycle_in_seven_stays_where_it_was() =>
+        Claim.Rate(1 / 7.0, tolerance: 0.005).MustHold(rng => RepairRota.Draw(7, rng)[6] == 6);
+}

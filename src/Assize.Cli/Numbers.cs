@@ -1,0 +1,43 @@
+using System.CommandLine;
+using System.CommandLine.Parsing;
+using System.Globalization;
+
+namespace Assize.Cli;
+
+/// <summary>How numbers are read and written: the same on every machine.</summary>
+static class Numbers
+{
+    public static Option<double?> Option(string name, string description) =>
+        new(name) { Description = description, CustomParser = Parse, HelpName = "number" };
+
+    /// <summary>An option whose number may be left out.</summary>
+    public static Option<double?> Side(string name, string description) =>
+        new(name) { Description = description, CustomParser = Parse, HelpName = "number", Arity = ArgumentArity.ZeroOrOne };
+
+    public static string Text(double value) => value.ToString("0.################", CultureInfo.InvariantCulture);
+
+    public static string Text(long value) => value.ToString("#,0", CultureInfo.InvariantCulture);
+
+    /// <summary>A probability that must not look smaller than it is: three digits, rounded up.</summary>
+    public static string AtMost(double probability)
+    {
+        if (probability is 0 or 1)
+            return Text(probability);
+
+        double unit = Math.Pow(10, Math.Floor(Math.Log10(probability)) - 2);
+        return (Math.Ceiling(probability / unit) * unit).ToString("G3", CultureInfo.InvariantCulture);
+    }
+
+    static double? Parse(ArgumentResult result)
+    {
+        if (result.Tokens.Count == 0)
+            return null;
+
+        string text = result.Tokens[0].Value;
+        if (double.TryParse(text, NumberStyles.Float, CultureInfo.InvariantCulture, out double value))
+            return value;
+
+        result.AddError($"'{text}' is not a number. Write it with a decimal point, for example 0.05 or 1e-6.");
+        return null;
+    }
+}

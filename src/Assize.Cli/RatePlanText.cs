@@ -1,0 +1,62 @@
+using Spectre.Console;
+
+namespace Assize.Cli;
+
+/// <summary>A plan as people read it.</summary>
+static class RatePlanText
+{
+    public static void Write(IAnsiConsole page, RateClaim claim)
+    {
+        var plan = claim.Plan();
+        page.MarkupLineInterpolated($"[bold]{claim}[/]");
+        page.MarkupLineInterpolated($"Risk of a false failure {Numbers.Text(claim.Risk)}, confidence {Numbers.Text(claim.Confidence)}.");
+        page.WriteLine();
+        page.Write(Ways(plan));
+        page.WriteLine();
+        page.Write(Theorems(plan));
+    }
+
+    static Grid Ways(Plan plan)
+    {
+        var grid = new Grid().AddColumn(new GridColumn().NoWrap().PadRight(3)).AddColumn();
+        grid.AddRow("Sequential", $"about {Trials(plan.Expected.AtTarget)} trials when the rate is at its target,");
+        grid.AddRow("", $"{Trials(plan.Expected.AtTolerance)} at the edge of the tolerance, {Trials(plan.Expected.AtDefect)} at the defect,");
+        grid.AddRow("", $"never more than {Numbers.Text(plan.TrialCap)}");
+        grid.AddRow("", "");
+        grid.AddRow("Fixed", $"{Numbers.Text(plan.FixedTrials)} trials: {Region(plan)}");
+        grid.AddRow("", $"false failure at most {Numbers.AtMost(plan.Limits.FalseFailure.Upper)}, "
+            + $"missed defect at most {Numbers.AtMost(plan.Limits.MissedDefect.Upper)}");
+        if (plan.FirstTrials < plan.FixedTrials)
+            grid.AddRow("", $"({Numbers.Text(plan.FirstTrials)} is the first number that works; from {Numbers.Text(plan.FixedTrials)} on, every number does)");
+        return grid;
+    }
+
+    static string Region(Plan plan)
+    {
+        var limits = plan.Limits;
+        if (limits.AcceptLow <= 0)
+            return $"upheld by {Numbers.Text(limits.AcceptHigh)} successes or fewer";
+        return limits.AcceptHigh >= limits.Trials
+            ? $"upheld by {Numbers.Text(limits.AcceptLow)} successes or more"
+            : $"upheld by {Numbers.Text(limits.AcceptLow)} to {Numbers.Text(limits.AcceptHigh)} successes";
+    }
+
+    static Table Theorems(Plan plan)
+    {
+        var table = new Table().Border(TableBorder.Simple)
+            .AddColumn("Theorem").AddColumn("Trials", column => column.RightAligned())
+            .AddColumn("Of the plan", column => column.RightAligned()).AddColumn("Assumes");
+        foreach (var theorem in plan.Alternatives)
+        {
+            table.AddRow(
+                theorem.Name,
+                theorem.Trials is { } trials ? Numbers.Text(trials) : "none",
+                theorem.Trials is { } needed ? $"{Math.Ceiling(100.0 * needed / plan.FixedTrials):0} %" : "",
+                theorem.Assumes);
+        }
+
+        return table;
+    }
+
+    static string Trials(double expected) => Numbers.Text((long)Math.Ceiling(expected));
+}

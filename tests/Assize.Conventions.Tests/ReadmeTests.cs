@@ -1,0 +1,35 @@
+using System.Text.RegularExpressions;
+
+namespace Assize.Conventions.Tests;
+
+/// <summary>The README shows only code that is compiled and run, and only commands that work.</summary>
+public partial class ReadmeTests
+{
+    [Fact]
+    public void Every_block_of_code_stands_in_the_samples()
+    {
+        var samples = Repository.Sources("samples").Select(file => Flat(File.ReadAllText(file))).ToArray();
+        var blocks = CodeBlock().Matches(Repository.Read("README.md")).Select(match => Flat(match.Groups[1].Value)).ToArray();
+
+        Assert.NotEmpty(blocks);
+        Assert.All(blocks, block => Assert.Contains(samples, sample => sample.Contains(block, StringComparison.Ordinal)));
+    }
+
+    [Fact]
+    public void The_test_command_is_the_one_that_continuous_integration_runs()
+    {
+        const string command = "dotnet test Kit.sln";
+
+        Assert.Contains(command + "\n", Repository.Read("README.md"), StringComparison.Ordinal);
+        Assert.Contains(command + " ", Repository.Read(".ci/run"), StringComparison.Ordinal);
+    }
+
+    // Indentation and line breaks are the page's own.
+    static string Flat(string text) => Whitespace().Replace(text, " ").Trim();
+
+    [GeneratedRegex("```csharp\n(.*?)```", RegexOptions.Singleline)]
+    private static partial Regex CodeBlock();
+
+    [GeneratedRegex(@"\s+")]
+    private static partial Regex Whitespace();
+}
