@@ -20,9 +20,9 @@ public sealed class RatePlan
     readonly List<RateSearch> _searches = [];
     readonly Lazy<IReadOnlyList<TheoremTrials>> _theorems;
 
-    RatePlan(Edges edges, double risk, double confidence)
+    RatePlan(Edges edges, double risk, double confidence, double miss)
     {
-        (Edges, Risk, Confidence, Miss) = (edges, risk, confidence, Decimals.Complement(confidence));
+        (Edges, Risk, Confidence, Miss) = (edges, risk, confidence, miss);
         double share = edges.LowerEdge is not null && edges.UpperEdge is not null ? risk / 2 : risk;
         if (edges.LowerEdge is { } lowerEdge)
             _lower = new RateSide(upper: false, lowerEdge, edges.LowerDefect, share);
@@ -62,7 +62,18 @@ public sealed class RatePlan
             throw Refused($"The confidence ({Check.Text(confidence)}) must be greater than the risk "
                 + $"({Check.Text(risk)}): a verdict that ignores the draws would do as well.");
 
-        return new RatePlan(edges, risk, confidence);
+        return new RatePlan(edges, risk, confidence, Decimals.Complement(confidence));
+    }
+
+    /// <summary>The plan of the same claim for a share of both error probabilities.</summary>
+    /// <param name="share">The share of risk and miss that the plan may spend, in (0, 1].</param>
+    /// <returns>A plan of risk share · <see cref="Risk"/> and miss share · <see cref="Miss"/>.</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The share lies outside its domain, or is NaN.</exception>
+    /// <exception cref="ClaimRefusedException">More than 1e15 trials would be needed.</exception>
+    public RatePlan Share(double share)
+    {
+        Check.Inside(share, 0, 1.0000000000000002, nameof(share));
+        return new RatePlan(Edges, share * Risk, 1 - share * Miss, share * Miss);
     }
 
     /// <summary>The claim's target, edges and defects.</summary>

@@ -1,0 +1,27 @@
+namespace Assize;
+
+/// <summary>How a claim is to be judged, whatever it claims.</summary>
+sealed record Terms
+{
+    public double Risk { get; init; } = 1e-9;
+
+    public double Confidence { get; init; } = 0.999;
+
+    public long? Trials { get; init; }
+
+    public long? TrialCap { get; init; }
+
+    public TimeSpan? TimeCap { get; init; }
+
+    public bool MayStayUndecided { get; init; }
+
+    public int Threads { get; init; } = 1;
+
+    public string? Name { get; init; }
+
+    public ReplayKey? OnlyTrial { get; init; }
+
+    public CancellationToken Stop { get; init; }
+
+    public Action<string>? Output { get; init; }
+}

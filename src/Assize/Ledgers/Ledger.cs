@@ -1,0 +1,69 @@
+namespace Assize;
+
+/// <summary>Records verdicts in the folder that ASSIZE_LEDGER names; without it, nowhere.</summary>
+static class Ledger
+{
+    public const string Variable = "ASSIZE_LEDGER";
+
+    static readonly Lock Gate = new();
+    static LedgerWriter? _writer;
+
+    /// <summary>Names this process in every entry.</summary>
+    public static string Run { get; } = Guid.NewGuid().ToString("n");
+
+    public static void Record(Verdict verdict)
+    {
+        if (Environment.GetEnvironmentVariable(Variable) is not { Length: > 0 } folder)
+            return;
+
+        lock (Gate)
+        {
+            if (_writer?.Folder != folder)
+                _writer = LedgerWriter.In(folder);
+            _writer.Write(Entry(verdict));
+        }
+    }
+
+    static LedgerEntry Entry(Verdict verdict)
+    {
+        var (hearing, report) = (verdict.Hearing, verdict.Report);
+        var claim = (RateClaim)hearing.Claim;
+        return new LedgerEntry
+        {
+            Schema = LedgerEntry.CurrentSchema,
+            Run = Run,
+            Seed = RunSeed.Text(hearing.Seed),
+            Stream = RunSeed.Text(hearing.Stream),
+            Assembly = hearing.Host.Assembly,
+            Test = hearing.Host.Test,
+            History = claim.Name ?? $"{hearing.Host.Method}: {claim.Sentence}",
+            Claim = claim.Sentence,
+            Family = "rate",
+            Target = claim.Target,
+            Tolerance = claim.Tolerance,
+            Defect = claim.Defect,
+            LowerDefect = claim.Edges.LowerDefect,
+            LowerEdge = claim.Edges.LowerEdge,
+            UpperEdge = claim.Edges.UpperEdge,
+            UpperDefect = claim.Edges.UpperDefect,
+            Risk = claim.Risk,
+            Confidence = claim.Confidence,
+            Trials = report.Trials,
+            Successes = report.Successes,
+            Cap = report.Cap == long.MaxValue ? null : report.Cap,
+            Observed = report.Trials == 0 ? null : report.Observed,
+            IntervalLower = report.Interval.Lower,
+            IntervalUpper = report.Interval.Upper,
+            LogEvidenceAgainstClaim = report.LogEvidenceAgainstClaim,
+            LogEvidenceAgainstDefectBelow = report.LogEvidenceAgainstDefectBelow,
+            LogEvidenceAgainstDefectAbove = report.LogEvidenceAgainstDefectAbove,
+            Verdict = verdict.Outcome,
+            Theorem = report.Theorem,
+            Seconds = verdict.Elapsed.TotalSeconds,
+            File = hearing.Site.File,
+            Line = hearing.Site.Line,
+            Replayable = hearing.Site.CanReplay,
+            Approximate = false,
+        };
+    }
+}

@@ -1,0 +1,9 @@
+namespace Assize;
+
+/// <summary>Where in the sources a claim is judged.</summary>
+/// <param name="TrialText">The trial as it is written.</param>
+/// <param name="Member">The calling member.</param>
+/// <param name="File">The full path of the source file.</param>
+/// <param name="Line">The line, counted from 1.</param>
+/// <param name="CanReplay">Whether the trials draw from the generator they are given.</param>
+sealed record Site(string TrialText, string Member, string File, int Line, bool CanReplay);

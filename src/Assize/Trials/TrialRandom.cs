@@ -1,0 +1,99 @@
+using System.Buffers.Binary;
+
+namespace Assize;
+
+/// <summary>The generator a trial gets: its numbers depend on the stream and the trial alone, not on what ran before.</summary>
+/// <remarks>Every virtual member is overridden, so that nothing comes from the framework's own generators.</remarks>
+sealed class TrialRandom : Random
+{
+    ulong _key;
+    ulong _trial;
+    ulong _block;
+    ulong _second;
+    bool _hasSecond;
+
+    /// <summary>Sets the generator to the beginning of a trial.</summary>
+    public void Start(ulong key, long trial) => (_key, _trial, _block, _hasSecond) = (key, (ulong)trial, 0, false);
+
+    public override int Next() => (int)NextBelow(int.MaxValue);
+
+    public override int Next(int maxValue)
+    {
+        ArgumentOutOfRangeException.ThrowIfNegative(maxValue);
+        return maxValue == 0 ? 0 : (int)NextBelow((ulong)maxValue);
+    }
+
+    public override int Next(int minValue, int maxValue)
+    {
+        ArgumentOutOfRangeException.ThrowIfGreaterThan(minValue, maxValue);
+        ulong range = (ulong)((long)maxValue - minValue);
+        return range == 0 ? minValue : (int)(minValue + (long)NextBelow(range));
+    }
+
+    public override long NextInt64() => (long)NextBelow(long.MaxValue);
+
+    public override long NextInt64(long maxValue)
+    {
+        ArgumentOutOfRangeException.ThrowIfNegative(maxValue);
+        return maxValue == 0 ? 0 : (long)NextBelow((ulong)maxValue);
+    }
+
+    public override long NextInt64(long minValue, long maxValue)
+    {
+        ArgumentOutOfRangeException.ThrowIfGreaterThan(minValue, maxValue);
+        ulong range = unchecked((ulong)(maxValue - minValue));
+        return range == 0 ? minValue : unchecked(minValue + (long)NextBelow(range));
+    }
+
+    /// <summary>A multiple of 2^-53 in [0, 1), each equally likely.</summary>
+    public override double NextDouble() => (NextWord() >> 11) * (1.0 / (1UL << 53));
+
+    /// <summary>A multiple of 2^-24 in [0, 1), each equally likely.</summary>
+    public override float NextSingle() => (NextWord() >> 40) * (1.0f / (1U << 24));
+
+    public override void NextBytes(byte[] buffer)
+    {
+        ArgumentNullException.ThrowIfNull(buffer);
+        NextBytes(buffer.AsSpan());
+    }
+
+    public override void NextBytes(Span<byte> buffer)
+    {
+        for (; buffer.Length >= sizeof(ulong); buffer = buffer[sizeof(ulong)..])
+            BinaryPrimitives.WriteUInt64LittleEndian(buffer, NextWord());
+        if (buffer.IsEmpty)
+            return;
+
+        Span<byte> last = stackalloc byte[sizeof(ulong)];
+        BinaryPrimitives.WriteUInt64LittleEndian(last, NextWord());
+        last[..buffer.Length].CopyTo(buffer);
+    }
+
+    protected override double Sample() => NextDouble();
+
+    // D. Lemire, ACM Trans. Model. Comput. Simul. 29 (2019) 3: unbiased, and a division only when the low half is small.
+    ulong NextBelow(ulong range)
+    {
+        ulong high = Math.BigMul(NextWord(), range, out ulong low);
+        if (low >= range)
+            return high;
+
+        for (ulong threshold = unchecked(0 - range) % range; low < threshold;)
+            high = Math.BigMul(NextWord(), range, out low);
+        return high;
+    }
+
+    ulong NextWord()
+    {
+        if (_hasSecond)
+        {
+            _hasSecond = false;
+            return _second;
+        }
+
+        var (a, b, c, d) = Philox.Block(_key, _trial, _block++);
+        _second = (ulong)d << 32 | c;
+        _hasSecond = true;
+        return (ulong)b << 32 | a;
+    }
+}
