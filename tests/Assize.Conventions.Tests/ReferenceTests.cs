@@ -9,8 +9,8 @@ public class ReferenceTests
 {
     [Theory]
     [InlineData("Assize.Bounds")]
-    [InlineData("Assize", "Assize.Bounds", "MathNet.Numerics")]
-    [InlineData("assize", "Assize", "Assize.Bounds", "System.CommandLine", "Spectre.Console")]
+    [InlineData("Assize", "Assize.Bounds")]
+    [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "System.CommandLine", "Spectre.Console")]
     [InlineData("Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis", "Microsoft.CodeAnalysis.CSharp")]
     [InlineData("Assize.Analyzers.Fixes", "Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis",
         "Microsoft.CodeAnalysis.CSharp", "Microsoft.CodeAnalysis.Workspaces", "Microsoft.CodeAnalysis.CSharp.Workspaces")]
