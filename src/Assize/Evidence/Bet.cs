@@ -66,35 +66,29 @@ sealed class Bet
         : LogAverage(one.Log(trials, successes), other.Log(trials, successes));
 
     /// <summary>The least number of successes with such a wealth, for a bet that gains by them; trials + 1 if there is none.</summary>
-    public long LeastSuccesses(long trials, double log)
+    public long LeastSuccesses(long trials, double log, long? guess = null) =>
+        First(trials, guess ?? trials / 2, successes => Log(trials, successes) >= log);
+
+    /// <summary>The greatest number of successes with such a wealth, for a bet that loses by them; -1 if there is none.</summary>
+    public long GreatestSuccesses(long trials, double log, long? guess = null) =>
+        First(trials, guess ?? trials / 2, successes => Log(trials, successes) < log) - 1;
+
+    // The first count in [0, trials] where a condition that stays true once it is true holds, looked for outwards from a guess.
+    static long First(long trials, long guess, Func<long, bool> holds)
     {
-        long low = -1, high = trials + 1;
-        while (low + 1 < high)
+        long low = -1, high = trials + 1, stride = 1;
+        for (long probe = Math.Clamp(guess, 0, trials); low + 1 < high; stride *= 4)
         {
-            long middle = low + (high - low) / 2;
-            if (Log(trials, middle) >= log)
-                high = middle;
+            if (holds(probe))
+                high = probe;
             else
-                low = middle;
+                low = probe;
+            probe = low < 0 && high > stride ? high - stride
+                : high > trials && low + stride <= trials ? low + stride
+                : low + (high - low) / 2;
         }
 
         return high;
-    }
-
-    /// <summary>The greatest number of successes with such a wealth, for a bet that loses by them; -1 if there is none.</summary>
-    public long GreatestSuccesses(long trials, double log)
-    {
-        long low = -1, high = trials + 1;
-        while (low + 1 < high)
-        {
-            long middle = low + (high - low) / 2;
-            if (Log(trials, middle) >= log)
-                low = middle;
-            else
-                high = middle;
-        }
-
-        return low;
     }
 
     static double Slack(double size) => double.IsInfinity(size) ? 0 : 8 * Unit * size + 1e-14;

@@ -73,7 +73,7 @@ sealed class RateRace : IRace<bool>
     {
         _decidedAtCap = _mayDecideAtCap;
         Outcome = !_mayDecideAtCap ? Assize.Outcome.Undecided
-            : _stakes.Limits!.Accept(_successes) ? Assize.Outcome.Upheld : Assize.Outcome.Refuted;
+            : _stakes.Limits.Accept(_successes) ? Assize.Outcome.Upheld : Assize.Outcome.Refuted;
     }
 
     // Each limit only grows with the trials, so those that matter for a stretch are the least and greatest at its ends.
@@ -82,8 +82,9 @@ sealed class RateRace : IRace<bool>
         long first = Math.Max(1, _trials);
         long last = first + Math.Clamp(first / 8, 16, 8192);
         _stretchEnd = last + 1;
-        (_redFrom, _redTo) = (_stakes.RedFrom(first), _stakes.RedTo(last));
-        _greenTo = _notAbove ? -1 : _stakes.ExcludesAboveTo(last);
-        _greenFrom = _notBelow ? long.MaxValue : _stakes.ExcludesBelowFrom(first);
+        var (atFirst, atLast) = (_stakes.Loose(first), _stakes.Loose(last));
+        (_redFrom, _redTo) = (atFirst.RedFrom, atLast.RedTo);
+        _greenTo = _notAbove ? -1 : atLast.NotAboveTo;
+        _greenFrom = _notBelow ? long.MaxValue : atFirst.NotBelowFrom;
     }
 }

@@ -14,6 +14,8 @@ sealed class RateStakes
     // Planning takes milliseconds and claims are judged again and again, row by row.
     static readonly ConcurrentDictionary<(Edges, double, double), RateStakes> Known = new();
 
+    const double LogTwo = 0.693147180559945309417;
+
     readonly double _red;
     readonly double _green;
 
@@ -24,13 +26,7 @@ sealed class RateStakes
         double reserve = ZeroFailures.Applies(plan.Edges) ? 0 : Reserve;
         (Risk, Miss) = ((1 - reserve) * plan.Risk, (1 - reserve) * plan.Miss);
         (_red, _green) = (-Elementary.Log(Risk), -Elementary.Log(Miss));
-        if (reserve == 0)
-        {
-            Trials = long.MaxValue;
-            return;
-        }
-
-        var reserved = plan.Share(reserve);
+        var reserved = reserve == 0 ? plan : plan.Share(reserve);
         Trials = reserved.FirstTrials;
         Limits = reserved.LimitsAt(Trials);
     }
@@ -43,7 +39,7 @@ sealed class RateStakes
 
     public long Trials { get; }
 
-    public RateLimits? Limits { get; }
+    public RateLimits Limits { get; }
 
     /// <summary>Whether the evidence against the claim has reached its level.</summary>
     public bool Refutes(long trials, long successes) =>
@@ -57,17 +53,19 @@ sealed class RateStakes
     public bool ExcludesBelow(long trials, long successes) =>
         Bets.DefectBelow is not { } bet || bet.LogAtLeast(trials, successes) >= _green;
 
-    /// <summary>The least number of successes at which the claim may be refuted from above, by a trigger looser than the exact test.</summary>
-    public long RedFrom(long trials) => Bets.ClaimFromAbove?.LeastSuccesses(trials, _red - TriggerSlack) ?? long.MaxValue;
+    /// <summary>Four limits that no exact test passes unless the count is at or beyond one of them.</summary>
+    public Triggers Loose(long trials) => At(trials, _red - TriggerSlack, _green - TriggerSlack, null);
 
-    /// <summary>The greatest number of successes at which the claim may be refuted from below.</summary>
-    public long RedTo(long trials) => Bets.ClaimFromBelow?.GreatestSuccesses(trials, _red - TriggerSlack) ?? -1;
+    /// <summary>The four limits to a hair, where the bets against the claim do not win together; quick when the guess is near.</summary>
+    public Triggers Close(long trials, Triggers? guess) =>
+        At(trials, _red + (Bets.ClaimFromAbove is null || Bets.ClaimFromBelow is null ? 0 : LogTwo), _green, guess);
 
-    /// <summary>The greatest number of successes at which a defect above may be excluded.</summary>
-    public long ExcludesAboveTo(long trials) => Bets.DefectAbove?.GreatestSuccesses(trials, _green - TriggerSlack) ?? -1;
-
-    /// <summary>The least number of successes at which a defect below may be excluded.</summary>
-    public long ExcludesBelowFrom(long trials) => Bets.DefectBelow?.LeastSuccesses(trials, _green - TriggerSlack) ?? long.MaxValue;
+    // An even average of two reaches a level only if one of them does.
+    Triggers At(long trials, double red, double green, Triggers? guess) => new(
+        Bets.ClaimFromAbove?.LeastSuccesses(trials, red, guess?.RedFrom) ?? long.MaxValue,
+        Bets.ClaimFromBelow?.GreatestSuccesses(trials, red, guess?.RedTo) ?? -1,
+        Bets.DefectAbove?.GreatestSuccesses(trials, green, guess?.NotAboveTo) ?? -1,
+        Bets.DefectBelow?.LeastSuccesses(trials, green, guess?.NotBelowFrom) ?? long.MaxValue);
 
     public static RateStakes For(Edges edges, double risk, double confidence) =>
         Known.GetOrAdd((edges, risk, confidence), static key => Of(RatePlan.For(key.Item1, key.Item2, key.Item3)));

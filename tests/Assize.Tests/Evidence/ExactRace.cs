@@ -128,7 +128,7 @@ sealed class ExactRace
         for (long s = _low; s <= _high; s++)
         {
             double mass = Take(s, 0) + Take(s, 1) + Take(s, 2);
-            if (_stakes.Limits!.Accept(s))
+            if (_stakes.Limits.Accept(s))
                 Green += mass;
             else
                 Red += mass;
