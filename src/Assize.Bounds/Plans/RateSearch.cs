@@ -13,10 +13,15 @@ sealed class RateSearch
     // Well above rounding, well below anything that would widen the search.
     const double Slack = 1e-9;
 
+    // The finer, the fewer runs are left to look at one by one; a block costs as much as a few runs.
+    const int Fineness = 4096;
+
     readonly RateSide _side;
     readonly RateSide? _opposite;
     readonly double _miss;
     readonly double _redAnyway;
+    readonly double _leastRedAnyway;
+    readonly long _certified;
     readonly bool _limitStays;
 
     public RateSearch(RateSide side, RateSide? opposite, double miss)
@@ -24,13 +29,15 @@ sealed class RateSearch
         _side = side;
         _opposite = opposite;
         _miss = miss;
-        _limitStays = side.CountedRate < 0.5;
+        _limitStays = side.LimitStays;
         Proven = ChernoffTrials.Ceiling(side, miss) ?? throw RatePlan.TooManyTrials();
         Proven++;
         _redAnyway = opposite?.Risk ?? 0;
         Floor = FirstPossible();
-        _redAnyway = MostRedAnyway(Floor);
+        _redAnyway = opposite?.SmoothedRed(Floor, opposite.Risk, side.Defect) ?? 0;
         Floor = FirstPossible();
+        _certified = CertifiedFrom();
+        _leastRedAnyway = LeastRedAnyway();
     }
 
     /// <summary>No smaller number of trials works.</summary>
@@ -42,7 +49,7 @@ sealed class RateSearch
     /// <summary>The last number of trials that fails, 0 if none does.</summary>
     public long LastFailing()
     {
-        long trials = CertifiedFrom() - 1;
+        long trials = _certified - 1;
         while (trials >= Floor)
         {
             long limit = _side.Limit(trials);
@@ -59,7 +66,7 @@ sealed class RateSearch
     /// <summary>The first number of trials that works, from the given one on.</summary>
     public long NextWorking(long trials)
     {
-        while (trials < Proven)
+        while (trials < _certified)
         {
             long limit = _side.Limit(trials);
             long end = RunEnd(trials, limit);
@@ -80,6 +87,9 @@ sealed class RateSearch
 
     bool Surely(double missed) => RateSide.Within(missed, _miss);
 
+    // From the floor to the certified trials only.
+    bool SurelyHere(double missed) => Surely(missed - _leastRedAnyway);
+
     bool Maybe(double missed) => missed <= (_miss + _redAnyway) * (1 + Slack);
 
     long FirstPossible() => IntegerSearch.First(
@@ -88,17 +98,23 @@ sealed class RateSearch
     double RedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
 
-    // The opposite limit's randomised test is the least powerful one of its level at this defect: with more trials,
-    // weaker still.
-    double MostRedAnyway(long trials) =>
-        _opposite?.TailBeyond(trials, _opposite.Limit(trials) - 1, _side.Defect) ?? 0;
+    // At this defect the opposite limit turns some verdicts red as well: at least so many, wherever it is looked at
+    // one by one.
+    double LeastRedAnyway()
+    {
+        if (_opposite is null)
+            return 0;
+
+        double level = _opposite.Risk * (1 - _opposite.MostHazard(Floor, _certified)) * (1 - Slack);
+        return level > 0 ? _opposite.SmoothedRed(_certified, level, _side.Defect) * (1 - Slack) : 0;
+    }
 
     // Downwards from Chernoff's number, in blocks that one evaluation settles.
     long CertifiedFrom()
     {
         long trials = Proven;
         long stride = (Proven - Floor) / 2;
-        while (stride > (trials - Floor) / 16 && stride * Math.Min(_side.CountedRate, 1 - _side.CountedRate) > 4)
+        while (stride > (trials - Floor) / Fineness && stride * Math.Min(_side.CountedRate, 1 - _side.CountedRate) > 4)
         {
             if (trials - stride >= Floor && Certified(trials - stride, trials))
                 trials -= stride;
@@ -111,12 +127,9 @@ sealed class RateSearch
 
     // In the block, the plain test's level is above risk · (1 - hazard): it misses less than the smoothed test of
     // that level.
-    // At one limit the hazard falls with the trials, at one distance between trials and limit it grows.
     bool Certified(long first, long last)
     {
-        double hazard = _limitStays
-            ? _side.Hazard(first, _side.Limit(last))
-            : _side.Hazard(last, last - first + _side.Limit(first));
+        double hazard = _side.MostHazard(first, last);
         double level = _side.Risk * (1 - hazard) * (1 - Slack);
         return level > 0 && _side.SmoothedMiss(first, level) <= _miss * (1 - Slack);
     }
@@ -142,12 +155,12 @@ sealed class RateSearch
     long? LastFailingInRun(long start, long end, long limit)
     {
         long last = _limitStays
-            ? IntegerSearch.First(start, end, start, n => Surely(_side.Missed(n, limit))) - 1
+            ? IntegerSearch.First(start, end, start, n => SurelyHere(_side.Missed(n, limit))) - 1
             : end;
         for (long trials = last; trials >= start; trials--)
         {
             double missed = _side.Missed(trials, _limitStays ? limit : limit - (end - trials));
-            if (!_limitStays && Surely(missed))
+            if (!_limitStays && SurelyHere(missed))
                 return null;
             if (!Maybe(missed) || !Works(trials))
                 return trials;

@@ -29,6 +29,10 @@ sealed class RateSide
     /// <summary>The rate, at the edge, of what this side counts.</summary>
     public double CountedRate => _upper ? _edge : 1 - _edge;
 
+    /// <summary>Whether the limit stays while trials are added, more often than its distance from the trials
+    /// does.</summary>
+    public bool LimitStays => CountedRate < 0.5;
+
     public double Edge => _edge;
 
     public double Defect => _defect;
@@ -72,10 +76,23 @@ sealed class RateSide
     public double SmoothedMiss(long trials, double level)
     {
         long limit = Limit(trials, level);
-        double spare = level - Beyond(trials, limit);
-        double share = Math.Max(0, Math.Min(1, spare / Mass(trials, limit, _edge)));
-        return Missed(trials, limit) - share * Mass(trials, limit, _defect);
+        return Missed(trials, limit) - Share(trials, limit, level) * Mass(trials, limit, _defect);
     }
+
+    /// <summary>
+    /// How often that randomised test is red at a rate on the far side of its edge, where it is the least powerful of
+    /// its level:
+    /// it falls, or stays, as trials are added.
+    /// </summary>
+    public double SmoothedRed(long trials, double level, double rate)
+    {
+        long limit = Limit(trials, level);
+        return TailBeyond(trials, limit, rate) + Share(trials, limit, level) * Mass(trials, limit, rate);
+    }
+
+    // How much of the limit itself must be red for the level to be met exactly.
+    double Share(long trials, long limit, double level) =>
+        Math.Max(0, Math.Min(1, (level - Beyond(trials, limit)) / Mass(trials, limit, _edge)));
 
     /// <summary>P(count = limit) / P(count ≥ limit) at the edge: grows with the limit, falls as trials are
     /// added.</summary>
@@ -90,6 +107,11 @@ sealed class RateSide
             ? 1 / new BinomialPoint(trials, limit, _edge).UpperTailOverMass
             : 1 / new BinomialPoint(trials, trials - limit, _edge).LowerTailOverMass;
     }
+
+    /// <summary>The greatest hazard of the limits of this side's risk between two numbers of trials.</summary>
+    public double MostHazard(long first, long last) => LimitStays
+        ? Hazard(first, Limit(last))
+        : Hazard(last, last - first + Limit(first));
 
     double Mass(long trials, long limit, double rate) =>
         Binomial.Mass(trials, _upper ? limit : trials - limit, rate);
