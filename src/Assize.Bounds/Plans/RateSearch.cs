@@ -16,6 +16,9 @@ sealed class RateSearch
     // The finer, the fewer runs are left to look at one by one; a block costs as much as a few runs.
     const int Fineness = 4096;
 
+    // Only a two-sided claim of a risk near its miss gets there; from then on a doubtful number counts as failing.
+    const int MostLooks = 20_000;
+
     readonly RateSide _side;
     readonly RateSide? _opposite;
     readonly double _miss;
@@ -23,6 +26,7 @@ sealed class RateSearch
     readonly double _leastRedAnyway;
     readonly long _certified;
     readonly bool _limitStays;
+    int _looks;
 
     public RateSearch(RateSide side, RateSide? opposite, double miss)
     {
@@ -32,10 +36,7 @@ sealed class RateSearch
         _limitStays = side.LimitStays;
         Proven = ChernoffTrials.Ceiling(side, miss) ?? throw RatePlan.TooManyTrials();
         Proven++;
-        _redAnyway = opposite?.Risk ?? 0;
-        Floor = FirstPossible();
-        _redAnyway = opposite?.SmoothedRed(Floor, opposite.Risk, side.Defect) ?? 0;
-        Floor = FirstPossible();
+        (Floor, _redAnyway) = Foundation(opposite?.Risk ?? 0);
         _certified = CertifiedFrom();
         _leastRedAnyway = LeastRedAnyway();
     }
@@ -92,8 +93,25 @@ sealed class RateSearch
 
     bool Maybe(double missed) => missed <= (_miss + _redAnyway) * (1 + Slack);
 
-    long FirstPossible() => IntegerSearch.First(
-        1, Proven, (long)(0.8 * Proven), trials => Maybe(_side.SmoothedMiss(trials, _side.Risk)));
+    // What the opposite limit may refuse at most falls as the floor rises, and the floor rises as that falls.
+    (long Floor, double RedAnyway) Foundation(double redAnyway)
+    {
+        long floor = FirstPossible((long)(0.8 * Proven), redAnyway);
+        while (_opposite is not null)
+        {
+            redAnyway = _opposite.SmoothedRed(floor, _opposite.Risk, _side.Defect);
+            long higher = FirstPossible(floor, redAnyway);
+            if (higher <= floor)
+                break;
+
+            floor = higher;
+        }
+
+        return (floor, redAnyway);
+    }
+
+    long FirstPossible(long guess, double redAnyway) => IntegerSearch.First(
+        1, Proven, guess, trials => _side.SmoothedMiss(trials, _side.Risk) <= (_miss + redAnyway) * (1 + Slack));
 
     double RedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
@@ -162,7 +180,7 @@ sealed class RateSearch
             double missed = _side.Missed(trials, _limitStays ? limit : limit - (end - trials));
             if (!_limitStays && SurelyHere(missed))
                 return null;
-            if (!Maybe(missed) || !Works(trials))
+            if (!Maybe(missed) || ++_looks > MostLooks || !Works(trials))
                 return trials;
         }
 
@@ -176,6 +194,8 @@ sealed class RateSearch
             : start;
         for (long trials = first; trials <= end; trials++)
         {
+            if (++_looks > MostLooks)
+                return FirstSureInRun(trials, end, limit + (_limitStays ? 0 : trials - start));
             if (!_limitStays && !Maybe(_side.Missed(trials, limit + (trials - start))))
                 return null;
             if (Works(trials))
@@ -183,5 +203,14 @@ sealed class RateSearch
         }
 
         return null;
+    }
+
+    long? FirstSureInRun(long start, long end, long limit)
+    {
+        if (!_limitStays)
+            return Surely(_side.Missed(start, limit)) ? start : null;
+
+        long first = IntegerSearch.First(start, end, end, n => Surely(_side.Missed(n, limit)));
+        return first <= end ? first : null;
     }
 }
