@@ -133,7 +133,7 @@ public sealed class RatePlan
     long FirstThatWorks()
     {
         long trials = _searches.Max(search => search.Floor);
-        while (true)
+        while (trials < Trials)
         {
             long next = _searches.Max(search => search.NextWorking(trials));
             if (next == trials)
@@ -141,6 +141,8 @@ public sealed class RatePlan
 
             trials = next;
         }
+
+        return Trials;
     }
 
     TheoremTrials TrialsOf(RateTheorem theorem) => new(

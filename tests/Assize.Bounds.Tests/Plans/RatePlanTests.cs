@@ -253,6 +253,27 @@ public class RatePlanTests
         }
     }
 
+    // The first three have a risk near their miss: too many numbers are doubtful for all of them to be looked at.
+    [Theory]
+    [InlineData(2.9594655400874337e-08, 2.0205676231846425e-07, 0.5386627598494425, 0.999972011195705)]
+    [InlineData(0.5, 1e-3, 0.2, 0.7)]
+    [InlineData(2.590314183439863e-07, 5.085908680399367e-09, 0.367231758468732, 0.8897117243572245)]
+    [InlineData(0.01, 1e-5, 1e-9, 0.999)]
+    public void Huge_plans_hold_for_every_larger_number_looked_at(double target, double defect, double risk, double confidence)
+    {
+        var plan = RatePlan.For(Edges.Around(Domain.Rate, target, 0, defect), risk, confidence);
+        var random = new Random(5);
+
+        Assert.InRange(plan.FirstTrials, 1, plan.Trials);
+        Assert.True(plan.LimitsAt(plan.FirstTrials).MeetsBoth);
+        Assert.True(plan.Limits.MeetsBoth);
+        for (int i = 0; i < 400; i++)
+        {
+            long more = plan.Trials + (long)(plan.Trials * Math.Pow(10, -8 * random.NextDouble()));
+            Assert.True(plan.LimitsAt(more).MeetsBoth, $"{more}");
+        }
+    }
+
     [Fact]
     public void A_rate_of_zero_is_upheld_by_no_success_and_refuted_by_one()
     {
