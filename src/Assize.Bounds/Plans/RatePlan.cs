@@ -4,9 +4,9 @@ namespace Assize.Bounds;
 /// bounded.</summary>
 /// <remarks>
 /// Exact binomial tails decide. A two-sided claim gives half its risk to each side; either miss may use all of its
-/// allowance,
-/// since the rate cannot be too low and too high at once. A side without a defect to catch keeps its limit and asks
-/// nothing of the miss.
+/// allowance, since the rate cannot be too low and too high at once. A side without a defect to catch keeps its limit
+/// and asks nothing of the miss. For a two-sided claim of a risk above about 0.2 the numbers of trials may be slightly
+/// larger than the smallest; they are never smaller.
 /// </remarks>
 public sealed class RatePlan
 {

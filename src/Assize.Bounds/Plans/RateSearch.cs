@@ -16,7 +16,7 @@ sealed class RateSearch
     // The finer, the fewer runs are left to look at one by one; a block costs as much as a few runs.
     const int Fineness = 4096;
 
-    // Only a two-sided claim of a risk near its miss gets there; from then on a doubtful number counts as failing.
+    // Only a two-sided claim of a great risk gets there; from then on a doubtful number counts as failing.
     const int MostLooks = 20_000;
 
     readonly RateSide _side;

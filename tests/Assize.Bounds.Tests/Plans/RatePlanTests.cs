@@ -253,7 +253,7 @@ public class RatePlanTests
         }
     }
 
-    // The first three have a risk near their miss: too many numbers are doubtful for all of them to be looked at.
+    // With a great risk, two-sided, too many numbers are doubtful for all of them to be looked at.
     [Theory]
     [InlineData(2.9594655400874337e-08, 2.0205676231846425e-07, 0.5386627598494425, 0.999972011195705)]
     [InlineData(0.5, 1e-3, 0.2, 0.7)]
