@@ -18,9 +18,9 @@ sealed record Desk(TextWriter Output, TextWriter Errors, bool IsTerminal, string
             ColorSystem = IsTerminal ? ColorSystemSupport.Detect : ColorSystemSupport.NoColors,
             Interactive = IsTerminal ? InteractionSupport.Detect : InteractionSupport.No,
         });
-        // A pipe has no width: lines that are cut or wrapped at 80 columns would be of no use to the next program.
+        // A pipe has no width: what is wrapped would be of no use to the next program.
         if (!IsTerminal)
-            page.Profile.Width = 240;
+            page.Profile.Width = 2000;
         return page;
     }
 }

@@ -14,7 +14,9 @@ static class Numbers
     public static Option<double?> Side(string name, string description) =>
         new(name) { Description = description, CustomParser = Parse, HelpName = "number", Arity = ArgumentArity.ZeroOrOne };
 
-    public static string Text(double value) => value.ToString("0.################", CultureInfo.InvariantCulture);
+    public static string Text(double value) => Math.Abs(value) is > 0 and < 0.001
+        ? value.ToString("0.##########e+0", CultureInfo.InvariantCulture)
+        : value.ToString("G10", CultureInfo.InvariantCulture);
 
     public static string Text(long value) => value.ToString("#,0", CultureInfo.InvariantCulture);
 
@@ -24,8 +26,9 @@ static class Numbers
         if (probability is 0 or 1)
             return Text(probability);
 
-        double unit = Math.Pow(10, Math.Floor(Math.Log10(probability)) - 2);
-        return (Math.Ceiling(probability / unit) * unit).ToString("G3", CultureInfo.InvariantCulture);
+        int exponent = (int)Math.Floor(Math.Log10(probability));
+        double lead = Math.Ceiling(probability / Math.Pow(10, exponent - 2) * (1 - 1e-12));
+        return Text(double.Parse(string.Create(CultureInfo.InvariantCulture, $"{lead}e{exponent - 2}"), CultureInfo.InvariantCulture));
     }
 
     static double? Parse(ArgumentResult result)

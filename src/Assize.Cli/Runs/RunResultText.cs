@@ -12,8 +12,8 @@ static class RunResultText
         foreach (var finding in result.Findings)
         {
             string place = finding.File.Length == 0 ? "" : $"{Path.GetRelativePath(desk.Folder, finding.File)}:{finding.Line}";
-            page.MarkupLineInterpolated($"[{(finding.Stands ? "yellow" : "dim")}]{finding.Rule}[/]  {place}");
-            page.WriteLine($"         {finding.Message}");
+            page.MarkupLine($"[{(finding.Stands ? "yellow" : "dim")}]{finding.Rule}[/]  {Markup.Escape(place)}");
+            page.Write(new Padder(new Text(finding.Message)).Padding(9, 0, 0, 0));
         }
 
         if (result.Findings.Count > 0)

@@ -11,6 +11,8 @@ static class SuiteRun
         string[] call = project.RunsItself ? ["exec", project.Assembly, .. extra] : ["vstest", project.Assembly, .. extra];
         var start = ChildProcess.Dotnet(Path.GetDirectoryName(project.File)!, call);
         start.Environment["ASSIZE_LEDGER"] = ledger;
+        // What is read line by line is no terminal, whatever the runner thinks.
+        start.Environment["NO_COLOR"] = "1";
         return await ChildProcess.RunAsync(start, line, token) == 0;
     }
 }

@@ -3,16 +3,14 @@ namespace Assize.Cli;
 /// <summary>The claims of one run against the budget for false failures.</summary>
 sealed class Tally
 {
+    // A decimal adds up what people write without rounding; what is too small for it counts as this much.
+    const decimal Least = 1e-25m;
+
     public Tally(IReadOnlyList<LedgerEntry> entries, double budget)
     {
-        Entries = entries;
-        Budget = budget;
-        foreach (var entry in entries)
-        {
-            // Each sum is rounded up: a suite's risk must never look smaller than it is.
-            FalseFailure = Math.Min(1, Math.BitIncrement(FalseFailure + entry.Risk));
-            Trials += entry.Trials;
-        }
+        (Entries, Budget) = (entries, budget);
+        Trials = entries.Sum(entry => entry.Trials);
+        FalseFailure = (double)Math.Min(1, entries.Sum(entry => Math.Max(Least, (decimal)entry.Risk)));
     }
 
     public IReadOnlyList<LedgerEntry> Entries { get; }
@@ -23,6 +21,7 @@ sealed class Tally
     /// <summary>At most this likely does a healthy suite go red in one run: the sum of the risks (union bound), in [0, 1].</summary>
     public double FalseFailure { get; }
 
+    /// <summary>Trials of all claims together.</summary>
     public long Trials { get; }
 
     public bool WithinBudget => FalseFailure <= Budget;

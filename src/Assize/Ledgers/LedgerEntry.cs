@@ -113,5 +113,5 @@ public sealed record LedgerEntry
 
     /// <summary>Fields that a later version added: kept, not understood.</summary>
     [JsonExtensionData]
-    public IDictionary<string, JsonElement>? Unknown { get; init; }
+    public Dictionary<string, JsonElement>? Unknown { get; set; }
 }

@@ -54,9 +54,8 @@ static class VerdictText
 
     static string Evidence(Verdict verdict)
     {
-        string against = $"{Wording.Odds(verdict.LogEvidenceAgainstClaim)} against the claim";
         double weaker = Math.Min(verdict.LogEvidenceAgainstDefectBelow, verdict.LogEvidenceAgainstDefectAbove);
-        return $"{against}, {Wording.Odds(weaker)} against a defect";
+        return $"against the claim {Wording.Odds(verdict.LogEvidenceAgainstClaim)}, against a defect {Wording.Odds(weaker)}";
     }
 
     static string Sure(Verdict verdict) => verdict.Outcome switch

@@ -6,7 +6,8 @@ namespace Assize;
 /// <summary>How numbers and claims are put into words, the same on every machine.</summary>
 static class Wording
 {
-    public static string Number(double value) => value.ToString("R", CultureInfo.InvariantCulture);
+    /// <summary>A number as its author would write it: ten digits tell apart what a claim can.</summary>
+    public static string Number(double value) => value.ToString("G10", CultureInfo.InvariantCulture);
 
     public static string Number(long value) => value.ToString("#,0", CultureInfo.InvariantCulture);
 
@@ -66,9 +67,9 @@ static class Wording
         };
         string caught = string.Join(" and ", new[]
         {
-            edges.LowerDefect is { } low ? $"{Number(low)} or less" : null,
-            edges.UpperDefect is { } high ? $"{Number(high)} or more" : null,
+            edges.LowerDefect is { } low ? $"from {Number(low)} down" : null,
+            edges.UpperDefect is { } high ? $"from {Number(high)} up" : null,
         }.Where(text => text is not null));
-        return defect == 2 * tolerance ? range : $"{range} (to be caught: {caught})";
+        return defect == 2 * tolerance ? range : $"{range} (caught {caught})";
     }
 }
