@@ -62,7 +62,7 @@ sealed class VariableReader
 
     static bool MayComeBetween(
         Write write, Write? start, ImmutableArray<ILoopOperation> startLoops, IOperation use, ImmutableArray<ILoopOperation> around) =>
-        (write.Start >= (start?.End ?? 0) && write.Start < use.Syntax.SpanStart)
+        (write.Start >= (start?.End ?? 0) && write.Start < use.Syntax.SpanStart && !write.Site.Syntax.Span.Contains(use.Syntax.Span))
         || write.Site.Loops().Any(loop => around.Contains(loop) && !startLoops.Contains(loop));
 
     Term Added(Write write, ImmutableArray<ILoopOperation> startLoops, ImmutableArray<ILoopOperation> around, NumberKind kind)

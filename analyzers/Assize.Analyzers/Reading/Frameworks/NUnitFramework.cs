@@ -59,14 +59,11 @@ sealed class NUnitFramework : TestFramework
 
     static Term? That(IInvocationOperation call, Evaluator evaluator, List<IOperation> arguments)
     {
-        if (call.TargetMethod.Parameters[0].Type.SpecialType == SpecialType.System_Boolean
-            && (arguments.Count == 1 || !IsConstraint(arguments[1])))
-            return evaluator.Read(arguments[0]);
-        return arguments.Count >= 2 && IsConstraint(arguments[1]) ? NUnitConstraints.Read(arguments[1], arguments[0], evaluator) : null;
+        var parameters = call.TargetMethod.Parameters;
+        if (parameters.Length >= 2 && parameters[1].Type.Name == "IResolveConstraint")
+            return NUnitConstraints.Read(arguments[1], arguments[0], evaluator);
+        return parameters[0].Type.SpecialType == SpecialType.System_Boolean ? evaluator.Read(arguments[0]) : null;
     }
-
-    static bool IsConstraint(IOperation argument) =>
-        NUnitConstraints.Bare(argument).Type?.ContainingNamespace?.ToDisplayString() is "NUnit.Framework.Constraints" or "NUnit.Framework";
 
     static Term? Compared(Operator op, Evaluator evaluator, List<IOperation> arguments) =>
         NUnitConstraints.Compared(op, arguments[0], arguments[1], evaluator);
