@@ -16,7 +16,7 @@ static class Rereading
             || old.Count != now.Count)
             return false;
         int at = old.FindIndex(reading => reading.Location.SourceSpan == diagnostic.Location.SourceSpan);
-        if (at < 0 || !IsSameQuestion(old[at], now[at]))
+        if (at < 0 || !IsSameQuestion(old[at], now[at]) || TrialsOf(now[at]) != FixNumbers.TrialsOf(diagnostic))
             return false;
         var tree = await after.GetSyntaxTreeAsync(cancellation).ConfigureAwait(false);
         var limits = Limits.From(before.Project.AnalyzerOptions.AnalyzerConfigOptionsProvider.GetOptions(tree!));
@@ -31,6 +31,8 @@ static class Rereading
         (ClaimReading a, ClaimReading b) => a.Needed == b.Needed,
         _ => false,
     };
+
+    static long? TrialsOf(Reading reading) => (reading as AssertionReading)?.Trials ?? (reading as ClaimReading)?.Trials;
 
     static bool IsSame(double? a, double? b) => a is null == b is null && Math.Abs((a ?? 0) - (b ?? 0)) < 1e-9;
 
