@@ -9,7 +9,10 @@ using Microsoft.CodeAnalysis.CSharp.Syntax;
 
 namespace Assize.Analyzers;
 
-/// <summary>Raises the number of trials to what is needed, at the one literal it comes from; offered where that removes the diagnostic.</summary>
+/// <summary>
+/// Raises the number of trials to what is needed, at the one literal it comes from; offered where that removes the
+/// diagnostic.
+/// </summary>
 [ExportCodeFixProvider(LanguageNames.CSharp)]
 [Shared]
 public sealed class RaiseTrialsFix : CodeFixProvider

@@ -6,7 +6,10 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>Reads changed code again: a fix is offered only when the same place is then read, with the same rate, and is silent.</summary>
+/// <summary>
+/// Reads changed code again: a fix is offered only when the same place is then read, with the same rate, and is
+/// silent.
+/// </summary>
 static class Rereading
 {
     public static async Task<bool> Removes(Diagnostic diagnostic, Document before, Document after, CancellationToken cancellation)

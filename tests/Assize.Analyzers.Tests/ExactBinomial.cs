@@ -2,7 +2,9 @@ using System.Numerics;
 
 namespace Assize.Analyzers.Tests;
 
-/// <summary>Binomial probabilities in whole numbers: the rate is a fraction, nothing is rounded before the last division.</summary>
+/// <summary>
+/// Binomial probabilities in whole numbers: the rate is a fraction, nothing is rounded before the last division.
+/// </summary>
 static class ExactBinomial
 {
     /// <summary>P(successes outside [low, high]) for a rate of over/under, as a double rounded once.</summary>

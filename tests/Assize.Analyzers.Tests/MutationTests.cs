@@ -4,7 +4,9 @@ using Microsoft.CodeAnalysis.CSharp.Syntax;
 
 namespace Assize.Analyzers.Tests;
 
-/// <summary>Half-typed and broken code is met without an exception: every miniature, cut, thinned and shuffled.</summary>
+/// <summary>
+/// Half-typed and broken code is met without an exception: every miniature, cut, thinned and shuffled.
+/// </summary>
 public class MutationTests(ITestOutputHelper output)
 {
     const int Mutants = 2000;

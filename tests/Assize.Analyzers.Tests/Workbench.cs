@@ -8,7 +8,9 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers.Tests;
 
-/// <summary>Compiles sources in memory against the assemblies of the running test, and runs the analyzer over them.</summary>
+/// <summary>
+/// Compiles sources in memory against the assemblies of the running test, and runs the analyzer over them.
+/// </summary>
 static class Workbench
 {
     static readonly ImmutableArray<MetadataReference> Platform =

@@ -38,7 +38,8 @@ public sealed class FreshProjectTests(ITestOutputHelper output) : IDisposable
     async Task Pack(string project) => await Run(
         Root, "pack", project, "-o", Path.Combine(_own, "feed"), $"-p:Version={Version}", $"-p:ArtifactsPath={Path.Combine(_own, "build")}");
 
-    // What is fresh comes from the feed into a folder of its own; everything else from the packages that are there already.
+    // What is fresh comes from the feed into a folder of its own; everything else from the packages that are there
+    // already.
     void WriteProject()
     {
         foreach (string file in Directory.GetFiles(Path.Combine(Root, "tests", "Assize.Packages.Tests", "Fresh")))

@@ -2,7 +2,9 @@ using System.Diagnostics;
 
 namespace Assize.Packages.Tests;
 
-/// <summary>Runs the SDK as somebody at a prompt would, without what the running test host put into the environment.</summary>
+/// <summary>
+/// Runs the SDK as somebody at a prompt would, without what the running test host put into the environment.
+/// </summary>
 static class Shell
 {
     static readonly TimeSpan Patience = TimeSpan.FromMinutes(5);

@@ -2,7 +2,9 @@ using Microsoft.CodeAnalysis;
 
 namespace Assize.Analyzers;
 
-/// <summary>C# arithmetic on boxed constants, replayed type by type. Null where C# would throw, or the types are not followed.</summary>
+/// <summary>
+/// C# arithmetic on boxed constants, replayed type by type. Null where C# would throw, or the types are not followed.
+/// </summary>
 static class Arithmetic
 {
     public static NumberKind KindOf(ITypeSymbol? type) => type?.SpecialType switch

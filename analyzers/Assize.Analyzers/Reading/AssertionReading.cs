@@ -43,7 +43,9 @@ sealed record AssertionReading(Location Location, Location? TrialsLiteral) : Rea
     public long? TrialsNeeded(double risk) =>
         MoreTrialsHelp ? Question.Ask(() => ProportionAssessment.TrialsNeeded(Shares, Rate.Value, Chance.OfOneRun(risk, Runs))) : null;
 
-    /// <summary>The nearest wrong rate that one evaluation catches with this confidence; null when there is none.</summary>
+    /// <summary>
+    /// The nearest wrong rate that one evaluation catches with this confidence; null when there is none.
+    /// </summary>
     public double? RateCaught(double confidence) =>
         Question.Ask(() => ProportionAssessment.SmallestDefectCaught(Trials, AcceptLow, AcceptHigh, Rate.Value, confidence)) + Rate.Value;
 }

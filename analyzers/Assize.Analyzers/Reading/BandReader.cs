@@ -2,7 +2,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>From a condition on one counter to the counts that pass; null as soon as the two ways to find them disagree.</summary>
+/// <summary>
+/// From a condition on one counter to the counts that pass; null as soon as the two ways to find them disagree.
+/// </summary>
 static class BandReader
 {
     // How far an edge found by algebra may be from the edge the arithmetic gives.

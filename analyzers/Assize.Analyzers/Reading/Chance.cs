@@ -12,7 +12,10 @@ static class Chance
         Math.Max(0, Of(once.Lower, runs) * (1 - Slack(runs))),
         Math.Min(1, Of(once.Upper, runs) * (1 + Slack(runs))));
 
-    /// <summary>The chance one evaluation may have, so that the run has no more than this: for tries a root, for repeats a share.</summary>
+    /// <summary>
+    /// The chance one evaluation may have, so that the run has no more than this: for tries a root, for repeats a
+    /// share.
+    /// </summary>
     public static double OfOneRun(double risk, Runs runs) =>
         runs.Tries > 1 ? Math.Pow(risk, 1.0 / runs.Tries) * (1 - Rounding) : risk / runs.Repeats;
 

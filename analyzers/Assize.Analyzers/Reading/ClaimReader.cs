@@ -5,7 +5,9 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>Reads a claim of the kit from its outermost term inwards: `Claim.Rate(…).WithRisk(…).WithTrials(…)`.</summary>
+/// <summary>
+/// Reads a claim of the kit from its outermost term inwards: `Claim.Rate(…).WithRisk(…).WithTrials(…)`.
+/// </summary>
 sealed class ClaimReader
 {
     const double UsualRisk = 1e-9;

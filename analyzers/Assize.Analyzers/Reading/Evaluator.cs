@@ -5,7 +5,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>From operations to terms: the one recursive reader. It starts at an assertion and asks only for what that needs.</summary>
+/// <summary>
+/// From operations to terms: the one recursive reader. It starts at an assertion and asks only for what that needs.
+/// </summary>
 sealed class Evaluator
 {
     const int MostNodes = 2000;
@@ -23,7 +25,9 @@ sealed class Evaluator
         _cancellation = cancellation;
     }
 
-    /// <summary>Whether a square root was taken: the band then moves with the trials, and more of them do not help.</summary>
+    /// <summary>
+    /// Whether a square root was taken: the band then moves with the trials, and more of them do not help.
+    /// </summary>
     public bool TookRoot { get; private set; }
 
     public Term Read(IOperation operation)
@@ -112,7 +116,8 @@ sealed class Evaluator
         _ => null,
     };
 
-    // Whatever calls something may differ in every pass; LawReader decides whether it is random. The rest is not followed.
+    // Whatever calls something may differ in every pass; LawReader decides whether it is random. The rest is not
+    // followed.
     static Term NewDraw(IOperation operation) => operation.DescendantsAndSelf().Any(part => part is IInvocationOperation)
         ? new Draw(operation.Syntax, Arithmetic.KindOf(operation.Type), operation)
         : new Unknown(operation.Kind.ToString());

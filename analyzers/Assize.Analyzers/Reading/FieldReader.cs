@@ -5,7 +5,9 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>The one value of a field of the file at hand, where nothing else in its type can have written to it.</summary>
+/// <summary>
+/// The one value of a field of the file at hand, where nothing else in its type can have written to it.
+/// </summary>
 static class FieldReader
 {
     public static IOperation? Initial(IFieldReferenceOperation reference)
@@ -24,7 +26,9 @@ static class FieldReader
     public static VariableDeclaratorSyntax? Declaration(IFieldSymbol field, SyntaxTree tree) =>
         field.DeclaringSyntaxReferences.FirstOrDefault(reference => reference.SyntaxTree == tree)?.GetSyntax() as VariableDeclaratorSyntax;
 
-    /// <summary>Every expression of the type that is assigned to a field of this name; by name, so rather one too many.</summary>
+    /// <summary>
+    /// Every expression of the type that is assigned to a field of this name; by name, so rather one too many.
+    /// </summary>
     public static IEnumerable<AssignmentExpressionSyntax> Assignments(IFieldSymbol field, SyntaxNode declaration) =>
         TypeAround(declaration).DescendantNodes().OfType<AssignmentExpressionSyntax>()
             .Where(assignment => NameOf(assignment.Left) == field.Name);

@@ -2,7 +2,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>Solves a condition for one part of it, in real arithmetic: it proposes edges, and evaluation disposes.</summary>
+/// <summary>
+/// Solves a condition for one part of it, in real arithmetic: it proposes edges, and evaluation disposes.
+/// </summary>
 sealed class Isolation
 {
     readonly Term _part;

@@ -4,7 +4,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>The rate of a yes/no draw on healthy code: exact where the generator is in sight, else the assertion's own target.</summary>
+/// <summary>
+/// The rate of a yes/no draw on healthy code: exact where the generator is in sight, else the assertion's own target.
+/// </summary>
 sealed class LawReader
 {
     // More values than this are not counted one by one.
@@ -17,7 +19,10 @@ sealed class LawReader
     public LawReader(Evaluator evaluator, DrawReader draws, RandomTypes types) =>
         (_evaluator, _draws, _types) = (evaluator, draws, types);
 
-    /// <summary>The rate of a band's counter; null when its draws are not surely random, independent and alike, or no rate is known.</summary>
+    /// <summary>
+    /// The rate of a band's counter; null when its draws are not surely random, independent and alike, or no rate is
+    /// known.
+    /// </summary>
     public Rate? Read(Band band)
     {
         Term condition = ((If)band.Count.Each).Condition;

@@ -4,7 +4,10 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>The literal behind a number: itself, or what a constant or never reassigned local of the same file is initialised with.</summary>
+/// <summary>
+/// The literal behind a number: itself, or what a constant or never reassigned local of the same file is initialised
+/// with.
+/// </summary>
 static class LiteralReader
 {
     public static Location? Of(IOperation number) => number.Unwrapped() switch

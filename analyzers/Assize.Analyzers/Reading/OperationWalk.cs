@@ -25,7 +25,10 @@ static class OperationWalk
         return false;
     }
 
-    /// <summary>The loops whose body runs this operation once a pass, outermost first; a loop's start and bound are not in its body.</summary>
+    /// <summary>
+    /// The loops whose body runs this operation once a pass, outermost first; a loop's start and bound are not in its
+    /// body.
+    /// </summary>
     public static ImmutableArray<ILoopOperation> Loops(this IOperation operation)
     {
         var loops = ImmutableArray.CreateBuilder<ILoopOperation>();

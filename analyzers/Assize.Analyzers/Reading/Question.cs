@@ -1,6 +1,8 @@
 namespace Assize.Analyzers;
 
-/// <summary>Questions to the numeric core. What it will not answer is silence here: no rule fails on a hostile constant.</summary>
+/// <summary>
+/// Questions to the numeric core. What it will not answer is silence here: no rule fails on a hostile constant.
+/// </summary>
 static class Question
 {
     public static T? Ask<T>(Func<T?> question)

@@ -32,7 +32,9 @@ sealed class RandomTypes
 
     public bool IsShared(IPropertySymbol property) => property is { IsStatic: true, Name: "Shared" } && IsRandom(property.ContainingType);
 
-    /// <summary>Whether a type belongs to the platform, a test framework or a library of stubs: never the code under test.</summary>
+    /// <summary>
+    /// Whether a type belongs to the platform, a test framework or a library of stubs: never the code under test.
+    /// </summary>
     public static bool IsFramework(ITypeSymbol type)
     {
         INamespaceSymbol? space = type.ContainingNamespace;

@@ -3,7 +3,9 @@ using Microsoft.CodeAnalysis.CSharp.Syntax;
 
 namespace Assize.Analyzers;
 
-/// <summary>What the source of a method or type gives away without being bound. Code without source gives nothing away.</summary>
+/// <summary>
+/// What the source of a method or type gives away without being bound. Code without source gives nothing away.
+/// </summary>
 /// <param name="IsVisible">Whether there is source at all.</param>
 /// <param name="MentionsGenerator">Whether a generator is named anywhere in it.</param>
 /// <param name="SeedsGenerator">Whether a generator is made with a seed in it, or may be.</param>

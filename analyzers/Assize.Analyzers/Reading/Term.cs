@@ -3,13 +3,17 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>What an expression of a test means. Immutable and compared by structure; readers match these, never code shapes.</summary>
+/// <summary>
+/// What an expression of a test means. Immutable and compared by structure; readers match these, never code shapes.
+/// </summary>
 abstract record Term
 {
     /// <summary>A constant: bool, int, long, float, double, decimal, or a string that is only ever compared.</summary>
     public sealed record Known(object Value) : Term;
 
-    /// <summary>A value computed anew each time its site is passed; two reads of one site in one pass are one value.</summary>
+    /// <summary>
+    /// A value computed anew each time its site is passed; two reads of one site in one pass are one value.
+    /// </summary>
     public sealed record Draw(SyntaxNode Site, NumberKind Kind, IOperation Code) : Term
     {
         public bool Equals(Draw? other) => other is not null && other.Site == Site;
@@ -17,7 +21,9 @@ abstract record Term
         public override int GetHashCode() => Site.GetHashCode();
     }
 
-    /// <summary>An operator applied in the arithmetic of <paramref name="Kind"/>; for a conversion, the kind it converts to.</summary>
+    /// <summary>
+    /// An operator applied in the arithmetic of <paramref name="Kind"/>; for a conversion, the kind it converts to.
+    /// </summary>
     public sealed record Apply(Operator Operator, NumberKind Kind, Term Left, Term? Right = null) : Term;
 
     /// <summary>One of two terms, by a condition.</summary>
@@ -84,7 +90,9 @@ abstract record Term
         _ => [this],
     };
 
-    /// <summary>This term with every occurrence of <paramref name="part"/> replaced and constants folded again.</summary>
+    /// <summary>
+    /// This term with every occurrence of <paramref name="part"/> replaced and constants folded again.
+    /// </summary>
     public Term With(Term part, Term by) => this == part ? by : this switch
     {
         Apply apply => Of(apply.Operator, apply.Kind, apply.Left.With(part, by), apply.Right?.With(part, by)),

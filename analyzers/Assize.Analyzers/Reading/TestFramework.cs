@@ -3,13 +3,18 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>One test framework: which methods are tests, and what its assertions demand. One file a framework, found by reflection.</summary>
+/// <summary>
+/// One test framework: which methods are tests, and what its assertions demand. One file a framework, found by
+/// reflection.
+/// </summary>
 abstract class TestFramework
 {
     /// <summary>A type without which the framework is not there.</summary>
     public abstract string AssertionType { get; }
 
-    /// <summary>The attributes that make a method a test, by name and namespace; classes derived from them count.</summary>
+    /// <summary>
+    /// The attributes that make a method a test, by name and namespace; classes derived from them count.
+    /// </summary>
     public abstract bool IsTestAttribute(INamedTypeSymbol attribute);
 
     /// <summary>What a call demands; null when it is no assertion that is followed.</summary>
@@ -24,7 +29,9 @@ abstract class TestFramework
     /// <summary>The constants of one data row; null for any other attribute.</summary>
     public abstract DataRow? Row(AttributeData attribute);
 
-    /// <summary>How often the framework runs the test and judges by all or the best run; null when that is not known.</summary>
+    /// <summary>
+    /// How often the framework runs the test and judges by all or the best run; null when that is not known.
+    /// </summary>
     public virtual Runs? RunsOf(AttributeData attribute) =>
         attribute.AttributeClass?.Name is { } name && (Has(name, "Retry") || Has(name, "Repeat") || Has(name, "Flaky")) ? null : Runs.Once;
 

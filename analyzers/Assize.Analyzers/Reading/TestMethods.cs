@@ -4,7 +4,9 @@ using Microsoft.CodeAnalysis;
 
 namespace Assize.Analyzers;
 
-/// <summary>The test frameworks of a compilation and the facts about a test method. Null without any framework.</summary>
+/// <summary>
+/// The test frameworks of a compilation and the facts about a test method. Null without any framework.
+/// </summary>
 sealed class TestMethods
 {
     static readonly ImmutableArray<TestFramework> All =
@@ -43,7 +45,9 @@ sealed class TestMethods
         return null;
     }
 
-    /// <summary>How often the framework runs the method; null when an attribute says something that is not followed.</summary>
+    /// <summary>
+    /// How often the framework runs the method; null when an attribute says something that is not followed.
+    /// </summary>
     public static Runs? RunsOf(IMethodSymbol method, TestFramework framework)
     {
         Runs runs = Runs.Once;

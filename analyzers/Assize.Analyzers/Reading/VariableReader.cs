@@ -5,7 +5,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>The value of a local or parameter at a use: its last certain assignment, and what was added to it since.</summary>
+/// <summary>
+/// The value of a local or parameter at a use: its last certain assignment, and what was added to it since.
+/// </summary>
 sealed class VariableReader
 {
     readonly Evaluator _evaluator;

@@ -4,7 +4,9 @@ using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
 
-/// <summary>Every write to every local and parameter of one body, in source order: made in one pass, asked backwards.</summary>
+/// <summary>
+/// Every write to every local and parameter of one body, in source order: made in one pass, asked backwards.
+/// </summary>
 sealed class Writes
 {
     readonly Dictionary<ISymbol, List<Write>> _writes = new(SymbolEqualityComparer.Default);

@@ -10,7 +10,9 @@ static class Numbers
 
     public static string Count(long count) => count.ToString("N0", CultureInfo.InvariantCulture);
 
-    /// <summary>The N of "in at least 1 of N runs": rounded up, so that the sentence promises no more than the probability.</summary>
+    /// <summary>
+    /// The N of "in at least 1 of N runs": rounded up, so that the sentence promises no more than the probability.
+    /// </summary>
     public static string RunsForAtLeast(double probability) => Whole(1 / probability, Math.Ceiling);
 
     /// <summary>The N of "in at most 1 of N runs": rounded down.</summary>
@@ -19,7 +21,9 @@ static class Numbers
     /// <summary>A rate or a distance to four significant digits.</summary>
     public static string Share(double share) => share.ToString("G4", CultureInfo.InvariantCulture);
 
-    /// <summary>A rate rounded to four digits away from another one, so that what is said to be caught is caught.</summary>
+    /// <summary>
+    /// A rate rounded to four digits away from another one, so that what is said to be caught is caught.
+    /// </summary>
     public static string ShareAwayFrom(double share, double origin)
     {
         double unit = Math.Pow(10, Math.Floor(Math.Log10(Math.Max(Math.Abs(share), 1e-12))) - 3);

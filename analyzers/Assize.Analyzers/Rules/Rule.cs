@@ -2,7 +2,9 @@ using Microsoft.CodeAnalysis;
 
 namespace Assize.Analyzers;
 
-/// <summary>One rule: a judgement of a reading. Found by reflection; <see cref="RandomizedTests"/> hosts them all.</summary>
+/// <summary>
+/// One rule: a judgement of a reading. Found by reflection; <see cref="RandomizedTests"/> hosts them all.
+/// </summary>
 abstract class Rule
 {
     protected Rule(DiagnosticDescriptor descriptor) => Descriptor = descriptor;

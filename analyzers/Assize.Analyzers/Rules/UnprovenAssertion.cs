@@ -2,7 +2,9 @@ using Microsoft.CodeAnalysis;
 
 namespace Assize.Analyzers;
 
-/// <summary>A hand-written assertion is neither proven to be red more often than the suite allows, nor proven not to be.</summary>
+/// <summary>
+/// A hand-written assertion is neither proven to be red more often than the suite allows, nor proven not to be.
+/// </summary>
 sealed class UnprovenAssertion : Rule
 {
     public const string Id = "ASZ2002";

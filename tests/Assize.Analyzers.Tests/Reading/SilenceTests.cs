@@ -1,6 +1,8 @@
 namespace Assize.Analyzers.Tests;
 
-/// <summary>Where anything is unsure, nothing is said: each line differs from one that is read in the one thing it names.</summary>
+/// <summary>
+/// Where anything is unsure, nothing is said: each line differs from one that is read in the one thing it names.
+/// </summary>
 public class SilenceTests
 {
     const string Head = "var picker = new Picker(); int ripe = 0;";

@@ -4,7 +4,9 @@ using static Assize.Analyzers.Term;
 
 namespace Assize.Analyzers;
 
-/// <summary>A constraint object read inside out as a condition on the actual value; null for any link that is not followed.</summary>
+/// <summary>
+/// A constraint object read inside out as a condition on the actual value; null for any link that is not followed.
+/// </summary>
 static class NUnitConstraints
 {
     public static Term? Read(IOperation constraint, IOperation actual, Evaluator evaluator)

@@ -42,7 +42,8 @@ sealed class XunitFramework : TestFramework
             call);
     }
 
-    // Equal(expected, actual, tolerance) of the floating types; Equal(expected, actual, precision) rounds both to digits.
+    // Equal(expected, actual, tolerance) of the floating types; Equal(expected, actual, precision) rounds both to
+    // digits.
     static Requirement? Equal(IInvocationOperation call, Evaluator evaluator, List<IOperation> arguments)
     {
         var parameters = call.TargetMethod.Parameters;

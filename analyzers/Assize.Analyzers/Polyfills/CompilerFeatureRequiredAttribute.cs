@@ -1,0 +1,10 @@
+namespace System.Runtime.CompilerServices;
+
+/// <summary>Lets required members compile on netstandard2.0.</summary>
+[AttributeUsage(AttributeTargets.All)]
+sealed class CompilerFeatureRequiredAttribute : Attribute
+{
+    public CompilerFeatureRequiredAttribute(string featureName) => FeatureName = featureName;
+
+    public string FeatureName { get; }
+}
