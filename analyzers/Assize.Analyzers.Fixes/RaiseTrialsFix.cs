@@ -18,7 +18,8 @@ namespace Assize.Analyzers;
 public sealed class RaiseTrialsFix : CodeFixProvider
 {
     /// <inheritdoc/>
-    public override ImmutableArray<string> FixableDiagnosticIds { get; } = [TooFewTrials.Id, FlakyAssertion.Id, UnprovenAssertion.Id];
+    public override ImmutableArray<string> FixableDiagnosticIds { get; } =
+        [TooFewTrials.Id, FlakyAssertion.Id, UnprovenAssertion.Id];
 
     /// <inheritdoc/>
     public override FixAllProvider GetFixAllProvider() => WellKnownFixAllProviders.BatchFixer;
@@ -28,11 +29,13 @@ public sealed class RaiseTrialsFix : CodeFixProvider
     {
         foreach (Diagnostic diagnostic in context.Diagnostics)
         {
-            if (await Changed(context.Document, diagnostic, context.CancellationToken).ConfigureAwait(false) is not { } changed)
+            if (await Changed(context.Document, diagnostic, context.CancellationToken).ConfigureAwait(
+                false) is not { } changed)
                 continue;
             string title = $"Raise the trials to {Numbers.Count(FixNumbers.TrialsOf(diagnostic)!.Value)}";
             // One key for all: fix-all raises every number to its own need.
-            context.RegisterCodeFix(CodeAction.Create(title, _ => Task.FromResult(changed), nameof(RaiseTrialsFix)), diagnostic);
+            context.RegisterCodeFix(
+                CodeAction.Create(title, _ => Task.FromResult(changed), nameof(RaiseTrialsFix)), diagnostic);
         }
     }
 
@@ -45,7 +48,8 @@ public sealed class RaiseTrialsFix : CodeFixProvider
             || Raised(literal, trials) is not { } raised)
             return null;
         Document changed = document.WithSyntaxRoot(root.ReplaceNode(literal, raised));
-        return await Rereading.Removes(diagnostic, document, changed, cancellation).ConfigureAwait(false) ? changed : null;
+        return await Rereading.Removes(diagnostic, document, changed, cancellation).ConfigureAwait(false) ? changed
+            : null;
     }
 
     static LiteralExpressionSyntax? Literal(SyntaxNode root, Location at) =>

@@ -12,7 +12,8 @@ namespace Assize.Analyzers;
 /// </summary>
 static class Rereading
 {
-    public static async Task<bool> Removes(Diagnostic diagnostic, Document before, Document after, CancellationToken cancellation)
+    public static async Task<bool> Removes(
+        Diagnostic diagnostic, Document before, Document after, CancellationToken cancellation)
     {
         if (await Reads(before, cancellation).ConfigureAwait(false) is not { } old
             || await Reads(after, cancellation).ConfigureAwait(false) is not { } now
@@ -23,7 +24,8 @@ static class Rereading
             return false;
         var tree = await after.GetSyntaxTreeAsync(cancellation).ConfigureAwait(false);
         var limits = Limits.From(before.Project.AnalyzerOptions.AnalyzerConfigOptionsProvider.GetOptions(tree!));
-        return RandomizedTests.Rules.All(rule => rule.Descriptor.Id != diagnostic.Id || rule.Judge(now[at], limits) is null);
+        return RandomizedTests.Rules.All(
+            rule => rule.Descriptor.Id != diagnostic.Id || rule.Judge(now[at], limits) is null);
     }
 
     // Raising a loop's bound alone would ask for another rate: that is another test, not this one with more trials.
@@ -35,7 +37,8 @@ static class Rereading
         _ => false,
     };
 
-    static long? TrialsOf(Reading reading) => (reading as AssertionReading)?.Trials ?? (reading as ClaimReading)?.Trials;
+    static long? TrialsOf(Reading reading) => (reading as AssertionReading)?.Trials
+        ?? (reading as ClaimReading)?.Trials;
 
     static bool IsSame(double? a, double? b) => a is null == b is null && Math.Abs((a ?? 0) - (b ?? 0)) < 1e-9;
 
@@ -46,9 +49,13 @@ static class Rereading
         SyntaxNode root = await model.SyntaxTree.GetRootAsync(cancellation).ConfigureAwait(false);
         var readings = new List<Reading>();
         if (SuiteReader.For(model.Compilation) is { } suite)
-            readings.AddRange(root.DescendantNodes().OfType<MethodDeclarationSyntax>().SelectMany(test => Of(test, suite, model, cancellation)));
+            readings.AddRange(
+                root.DescendantNodes().OfType<MethodDeclarationSyntax>().SelectMany(
+                test => Of(test, suite, model, cancellation)));
         if (ClaimReader.For(model.Compilation) is { } claims)
-            readings.AddRange(root.DescendantNodes().OfType<InvocationExpressionSyntax>().SelectMany(call => Of(call, claims, model, cancellation)));
+            readings.AddRange(
+                root.DescendantNodes().OfType<InvocationExpressionSyntax>().SelectMany(
+                call => Of(call, claims, model, cancellation)));
         return readings;
     }
 

@@ -19,7 +19,8 @@ public sealed class RandomizedTests : DiagnosticAnalyzer
     ];
 
     /// <inheritdoc/>
-    public override ImmutableArray<DiagnosticDescriptor> SupportedDiagnostics { get; } = [.. AllRules.Select(rule => rule.Descriptor)];
+    public override ImmutableArray<DiagnosticDescriptor> SupportedDiagnostics { get; } =
+        [.. AllRules.Select(rule => rule.Descriptor)];
 
     internal static ImmutableArray<Rule> Rules => AllRules;
 
@@ -56,7 +57,8 @@ public sealed class RandomizedTests : DiagnosticAnalyzer
         var call = (IInvocationOperation)context.Operation;
         if (!claims.Makes(call) || claims.Read(call, context.CancellationToken) is not { } reading)
             return;
-        Judge(reading, Limits.From(context.Options.AnalyzerConfigOptionsProvider.GetOptions(call.Syntax.SyntaxTree)), context.ReportDiagnostic);
+        Judge(reading, Limits.From(context.Options.AnalyzerConfigOptionsProvider.GetOptions(call.Syntax.SyntaxTree)),
+            context.ReportDiagnostic);
     }
 
     static void Judge(Reading reading, Limits limits, Action<Diagnostic> report)

@@ -8,14 +8,16 @@ public class MiniatureTests(ITestOutputHelper output)
 {
     const double WidestEnclosure = 0.01;
 
-    static readonly string Product = Repository.Read("tests", "Assize.Analyzers.Tests", "Miniatures", "product", "Products.cs");
+    static readonly string Product = Repository.Read(
+        "tests", "Assize.Analyzers.Tests", "Miniatures", "product", "Products.cs.txt");
 
     [Fact]
     public void Every_count_of_one_method_is_read_with_its_number()
     {
         var readings = ReadAll().ToDictionary(reading => Key(reading.Location));
         var answers = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "answers.csv");
-        var missed = answers.Where(row => !readings.TryGetValue(Key(row), out var reading) || !Agrees(row, reading)).ToList();
+        var missed = answers.Where(row => !readings.TryGetValue(Key(row), out var reading) || !Agrees(row, reading))
+            .ToList();
         foreach (var row in missed)
             output.WriteLine($"{Key(row)}: {(readings.TryGetValue(Key(row), out var wrong) ? wrong : "not read")}");
         output.WriteLine($"{answers.Count - missed.Count} of {answers.Count} answers agree");
@@ -27,7 +29,8 @@ public class MiniatureTests(ITestOutputHelper output)
     [Fact]
     public async Task No_look_alike_is_read_or_reported()
     {
-        var silent = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "silent.csv").Select(Key).ToHashSet();
+        var silent = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "silent.csv").Select(Key)
+            .ToHashSet();
         var reported = (await Workbench.Analyze(Compilation())).Select(diagnostic => Key(diagnostic.Location));
         var wrong = ReadAll().Where(reading => reading.FalseFailure.Upper > 0).Select(reading => Key(reading.Location))
             .Concat(reported).Where(silent.Contains).ToList();
@@ -41,8 +44,10 @@ public class MiniatureTests(ITestOutputHelper output)
     public void Whatever_else_is_read_agrees_with_its_number()
     {
         var expected = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "answers.csv").Select(Key)
-            .Concat(Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "silent.csv").Select(Key)).ToHashSet();
-        var elsewhere = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "elsewhere.csv").ToDictionary(Key);
+            .Concat(Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "silent.csv").Select(Key))
+                .ToHashSet();
+        var elsewhere = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "elsewhere.csv")
+            .ToDictionary(Key);
         var others = ReadAll().Where(reading => !expected.Contains(Key(reading.Location))).ToList();
         foreach (var reading in others)
             output.WriteLine($"{Key(reading.Location)} {reading}");
@@ -53,10 +58,12 @@ public class MiniatureTests(ITestOutputHelper output)
     [Fact]
     public async Task The_rules_report_what_they_should()
     {
-        var reported = (await Workbench.Analyze(Compilation())).Select(diagnostic => (Key(diagnostic.Location), diagnostic.Id)).ToHashSet();
+        var reported = (await Workbench.Analyze(Compilation())).Select(
+            diagnostic => (Key(diagnostic.Location), diagnostic.Id)).ToHashSet();
         var answers = Repository.Table("tests", "Assize.Analyzers.Tests", "Miniatures", "answers.csv");
         var wrong = answers
-            .Where(row => row["expected_rules"].Split(' ').Contains("ASZ2001") != reported.Contains((Key(row), "ASZ2001")));
+            .Where(row =>
+                row["expected_rules"].Split(' ').Contains("ASZ2001") != reported.Contains((Key(row), "ASZ2001")));
 
         Assert.Equal(12, answers.Count(row => row["expected_rules"].Contains("ASZ2001", StringComparison.Ordinal)));
         Assert.Empty(wrong.Select(Key));
@@ -81,13 +88,15 @@ public class MiniatureTests(ITestOutputHelper output)
     // Never too few; a share on a rim may cost one step of the count more.
     static bool AgreesOnTrials(string needed, AssertionReading reading) =>
         needed == "never" ? reading.TrialsNeeded(1e-6) is null
-        : reading.TrialsNeeded(1e-6) is { } trials && trials >= Number(needed) && trials <= (Number(needed) * 1.02) + 60;
+        : reading.TrialsNeeded(1e-6) is { } trials && trials >= Number(needed)
+            && trials <= (Number(needed) * 1.02) + 60;
 
     // The table speaks of whole runs; where both directions are as near, either sign is right.
     static bool AgreesOnDefect(Dictionary<string, string> row, AssertionReading reading) =>
         reading.Runs != Runs.Once
         || (reading.RateCaught(0.999) is { } rate
-            && Math.Abs(Math.Abs(rate - reading.Rate.Value) - Math.Abs(Number(row["smallest_defect_caught_99.9"]))) < 1e-5);
+            && Math.Abs(Math.Abs(rate - reading.Rate.Value) - Math.Abs(
+                Number(row["smallest_defect_caught_99.9"]))) < 1e-5);
 
     static IEnumerable<AssertionReading> ReadAll() => Workbench.Readings(Compilation());
 
@@ -95,7 +104,8 @@ public class MiniatureTests(ITestOutputHelper output)
     {
         string root = Repository.Path("tests", "Assize.Analyzers.Tests", "Miniatures");
         return Workbench.Compile(
-            new[] { "xunit", "nunit" }.SelectMany(folder => Directory.GetFiles(Path.Combine(root, folder), "*.cs")).Order(StringComparer.Ordinal)
+            new[] { "xunit", "nunit" }.SelectMany(folder => Directory.GetFiles(Path.Combine(root, folder), "*.cs.txt"))
+                .Order(StringComparer.Ordinal)
                 .Select(path => CSharpSyntaxTree.ParseText(File.ReadAllText(path), Workbench.Language, path)),
             Product);
     }
@@ -105,7 +115,7 @@ public class MiniatureTests(ITestOutputHelper output)
     static string Key(Location location)
     {
         string[] parts = location.SourceTree!.FilePath.Split(Path.DirectorySeparatorChar);
-        return $"{parts[^2]}/{parts[^1]}:{location.GetLineSpan().StartLinePosition.Line + 1}";
+        return $"{parts[^2]}/{Path.GetFileNameWithoutExtension(parts[^1])}:{location.GetLineSpan().StartLinePosition.Line + 1}";
     }
 
     static double Number(string text) => double.Parse(text, CultureInfo.InvariantCulture);

@@ -16,7 +16,8 @@ static class Repository
     public static List<Dictionary<string, string>> Table(params string[] parts)
     {
         var lines = File.ReadAllLines(Path(parts)).Where(line => !line.StartsWith('#')).Select(Fields).ToList();
-        return [.. lines.Skip(1).Select(fields => lines[0].Zip(fields).ToDictionary(pair => pair.First, pair => pair.Second))];
+        return [.. lines.Skip(1).Select(
+            fields => lines[0].Zip(fields).ToDictionary(pair => pair.First, pair => pair.Second))];
     }
 
     static List<string> Fields(string line)

@@ -26,7 +26,9 @@ static class Verify
     public static async Task Silent(string statements, string? attributes = null, string parameters = "")
     {
         var compilation = Workbench.Compile(InTest(statements, attributes, parameters));
-        Assert.Empty(compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(found => found.Severity == DiagnosticSeverity.Error));
+        Assert.Empty(
+            compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(
+            found => found.Severity == DiagnosticSeverity.Error));
         Assert.Empty(await Workbench.Analyze(compilation));
     }
 
@@ -34,11 +36,14 @@ static class Verify
     public static AssertionReading Reading(string statements, string? attributes = null, string parameters = "")
     {
         var compilation = Workbench.Compile(InTest(statements, attributes, parameters));
-        Assert.Empty(compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(found => found.Severity == DiagnosticSeverity.Error));
+        Assert.Empty(
+            compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(
+            found => found.Severity == DiagnosticSeverity.Error));
         return Assert.Single(Workbench.Readings(compilation));
     }
 
-    public static async Task<string> Message(string id, string statements, IReadOnlyDictionary<string, string>? settings = null)
+    public static async Task<string> Message(
+        string id, string statements, IReadOnlyDictionary<string, string>? settings = null)
     {
         var diagnostic = Assert.Single(await Found(id, InTest(statements), settings));
         return diagnostic.GetMessage(System.Globalization.CultureInfo.InvariantCulture);
@@ -49,7 +54,8 @@ static class Verify
     {
         var (document, diagnostics) = await Prepared(id, InTest(before));
         var action = Assert.Single(await Actions(document, Assert.Single(diagnostics)));
-        var operation = (await action.GetOperationsAsync(TestContext.Current.CancellationToken)).OfType<ApplyChangesOperation>().Single();
+        var operation = (await action.GetOperationsAsync(TestContext.Current.CancellationToken))
+            .OfType<ApplyChangesOperation>().Single();
         string changed = await Text(operation.ChangedSolution.GetDocument(document.Id)!);
         Assert.Equal(InTest(after), changed);
         Assert.Empty(await Found(id, changed, null));
@@ -72,21 +78,26 @@ static class Verify
         {
             solution = With(solution, name, out ProjectId project);
             foreach (string file in new[] { "A.cs", "B.cs" })
-                solution = solution.AddDocument(DocumentId.CreateNewId(project), file, InTest(statements).Replace("class Tests", "class " + file[..1], StringComparison.Ordinal));
+                solution = solution.AddDocument(
+                    DocumentId.CreateNewId(project), file, InTest(statements)
+                    .Replace("class Tests", "class " + file[..1], StringComparison.Ordinal));
         }
 
         var first = solution.Projects.First().Documents.First();
         var context = new FixAllContext(
-            first, new RaiseTrialsFix(), scope, nameof(RaiseTrialsFix), [id], new Source(id), TestContext.Current.CancellationToken);
+            first, new RaiseTrialsFix(), scope, nameof(RaiseTrialsFix), [id], new Source(id),
+                TestContext.Current.CancellationToken);
         var action = await new RaiseTrialsFix().GetFixAllProvider().GetFixAsync(context);
-        var changed = (await action!.GetOperationsAsync(TestContext.Current.CancellationToken)).OfType<ApplyChangesOperation>().Single().ChangedSolution;
+        var changed = (await action!.GetOperationsAsync(TestContext.Current.CancellationToken))
+            .OfType<ApplyChangesOperation>().Single().ChangedSolution;
         int left = 0;
         foreach (Document document in changed.Projects.SelectMany(project => project.Documents))
             left += (await Found(id, await Text(document), null)).Count;
         return left;
     }
 
-    public static string InTest(string statements, string? attributes = null, string parameters = "") => statements.Contains("class ", StringComparison.Ordinal)
+    public static string InTest(string statements, string? attributes = null, string parameters = "") =>
+        statements.Contains("class ", StringComparison.Ordinal)
         ? statements
         : $$"""
         using System;
@@ -113,7 +124,8 @@ static class Verify
     {
         var spans = new List<TextSpan>();
         string source = marked;
-        for (int start = source.IndexOf("[|", StringComparison.Ordinal); start >= 0; start = source.IndexOf("[|", StringComparison.Ordinal))
+        for (int start = source.IndexOf("[|", StringComparison.Ordinal); start >= 0; start = source.IndexOf(
+            "[|", StringComparison.Ordinal))
         {
             int end = source.IndexOf("|]", StringComparison.Ordinal) - 2;
             source = source.Remove(end + 2, 2).Remove(start, 2);
@@ -126,14 +138,18 @@ static class Verify
     static async Task<List<Diagnostic>> Found(string id, string source, IReadOnlyDictionary<string, string>? settings)
     {
         var compilation = Workbench.Compile(source);
-        Assert.Empty(compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(found => found.Severity == DiagnosticSeverity.Error));
-        return [.. (await Workbench.Analyze(compilation, settings)).Where(found => found.Id == id).OrderBy(found => found.Location.SourceSpan.Start)];
+        Assert.Empty(
+            compilation.GetDiagnostics(TestContext.Current.CancellationToken).Where(
+            found => found.Severity == DiagnosticSeverity.Error));
+        return [.. (await Workbench.Analyze(compilation, settings)).Where(found => found.Id == id).OrderBy(
+            found => found.Location.SourceSpan.Start)];
     }
 
     static async Task<(Document Document, List<Diagnostic> Diagnostics)> Prepared(string id, string source)
     {
         var solution = With(new AdhocWorkspace().CurrentSolution, "Tests", out ProjectId project);
-        var document = solution.AddDocument(DocumentId.CreateNewId(project), "Test.cs", source).Projects.Single().Documents.Single();
+        var document = solution.AddDocument(DocumentId.CreateNewId(project), "Test.cs", source).Projects.Single()
+            .Documents.Single();
         return (document, await new Source(id).In(document));
     }
 
@@ -142,35 +158,44 @@ static class Verify
         project = ProjectId.CreateNewId();
         return solution.AddProject(ProjectInfo.Create(
             project, VersionStamp.Default, name, name, LanguageNames.CSharp, parseOptions: Workbench.Language,
-            compilationOptions: Workbench.Compile("").Options, metadataReferences: Workbench.References(Workbench.Orchard)));
+            compilationOptions: Workbench.Compile("").Options,
+                metadataReferences: Workbench.References(Workbench.Orchard)));
     }
 
     static async Task<List<CodeAction>> Actions(Document document, Diagnostic diagnostic)
     {
         var actions = new List<CodeAction>();
         await new RaiseTrialsFix().RegisterCodeFixesAsync(
-            new CodeFixContext(document, diagnostic, (action, _) => actions.Add(action), TestContext.Current.CancellationToken));
+            new CodeFixContext(
+                document, diagnostic, (action, _) => actions.Add(action), TestContext.Current.CancellationToken));
         return actions;
     }
 
-    static async Task<string> Text(Document document) => (await document.GetTextAsync(TestContext.Current.CancellationToken)).ToString();
+    static async Task<string> Text(Document document) =>
+        (await document.GetTextAsync(TestContext.Current.CancellationToken)).ToString();
 
     sealed class Source(string id) : FixAllContext.DiagnosticProvider
     {
         public async Task<List<Diagnostic>> In(Document document) =>
             [.. (await GetAllDiagnosticsAsync(document.Project, TestContext.Current.CancellationToken))
-                .Where(found => found.Location.SourceTree?.FilePath == document.FilePath || document.Project.DocumentIds.Count == 1)];
+                .Where(found => found.Location.SourceTree?.FilePath == document.FilePath
+                    || document.Project.DocumentIds.Count == 1)];
 
-        public override async Task<IEnumerable<Diagnostic>> GetAllDiagnosticsAsync(Project project, CancellationToken cancellationToken) =>
-            (await Workbench.Analyze((await project.GetCompilationAsync(cancellationToken))!)).Where(found => found.Id == id);
+        public override async Task<IEnumerable<Diagnostic>> GetAllDiagnosticsAsync(
+            Project project, CancellationToken cancellationToken) =>
+            (await Workbench.Analyze((await project.GetCompilationAsync(cancellationToken))!)).Where(
+                found => found.Id == id);
 
-        public override async Task<IEnumerable<Diagnostic>> GetDocumentDiagnosticsAsync(Document document, CancellationToken cancellationToken)
+        public override async Task<IEnumerable<Diagnostic>> GetDocumentDiagnosticsAsync(
+            Document document, CancellationToken cancellationToken)
         {
             var tree = await document.GetSyntaxTreeAsync(cancellationToken);
-            return (await GetAllDiagnosticsAsync(document.Project, cancellationToken)).Where(found => found.Location.SourceTree == tree);
+            return (await GetAllDiagnosticsAsync(document.Project, cancellationToken)).Where(
+                found => found.Location.SourceTree == tree);
         }
 
-        public override Task<IEnumerable<Diagnostic>> GetProjectDiagnosticsAsync(Project project, CancellationToken cancellationToken) =>
+        public override Task<IEnumerable<Diagnostic>> GetProjectDiagnosticsAsync(
+            Project project, CancellationToken cancellationToken) =>
             Task.FromResult<IEnumerable<Diagnostic>>([]);
     }
 }

@@ -49,17 +49,22 @@ static class Workbench
     public static CSharpCompilation Compile(string source, string product = Orchard) =>
         Compile([CSharpSyntaxTree.ParseText(source, Language, "Test.cs")], product);
 
-    public static CSharpCompilation Compile(IEnumerable<SyntaxTree> trees, string product = Orchard) => CSharpCompilation.Create(
-        "Tests", trees, References(product), new CSharpCompilationOptions(OutputKind.DynamicallyLinkedLibrary, nullableContextOptions: NullableContextOptions.Enable));
+    public static CSharpCompilation Compile(IEnumerable<SyntaxTree> trees, string product = Orchard) =>
+        CSharpCompilation.Create(
+        "Tests", trees, References(product),
+            new CSharpCompilationOptions(
+            OutputKind.DynamicallyLinkedLibrary, nullableContextOptions: NullableContextOptions.Enable));
 
-    public static async Task<ImmutableArray<Diagnostic>> Analyze(Compilation compilation, IReadOnlyDictionary<string, string>? settings = null)
+    public static async Task<ImmutableArray<Diagnostic>> Analyze(
+        Compilation compilation, IReadOnlyDictionary<string, string>? settings = null)
     {
         var options = new CompilationWithAnalyzersOptions(
             new AnalyzerOptions([], new Settings(settings ?? ImmutableDictionary<string, string>.Empty)),
             (exception, _, _) => throw new InvalidOperationException("The analyzer threw.", exception),
             concurrentAnalysis: false,
             logAnalyzerExecutionTime: false);
-        return await compilation.WithAnalyzers([new RandomizedTests()], options).GetAnalyzerDiagnosticsAsync(TestContext.Current.CancellationToken);
+        return await compilation.WithAnalyzers([new RandomizedTests()], options).GetAnalyzerDiagnosticsAsync(
+            TestContext.Current.CancellationToken);
     }
 
     /// <summary>What is read in every test of a compilation, without any rule.</summary>
@@ -76,7 +81,8 @@ static class Workbench
                     && model.GetOperation(declaration) is IMethodBodyOperation { BlockBody: { } body }
                     && suite.Admit(method, body.Syntax) is { } framework)
                 {
-                    foreach (AssertionReading reading in suite.Read(method, framework, body, TestContext.Current.CancellationToken))
+                    foreach (AssertionReading reading in suite.Read(
+                        method, framework, body, TestContext.Current.CancellationToken))
                         yield return reading;
                 }
             }
@@ -90,8 +96,11 @@ static class Workbench
             "Product",
             [CSharpSyntaxTree.ParseText(source, Language)],
             Platform,
-            new CSharpCompilationOptions(OutputKind.DynamicallyLinkedLibrary, nullableContextOptions: NullableContextOptions.Enable)).Emit(image);
-        Assert.True(result.Success, string.Join('\n', result.Diagnostics.Where(found => found.Severity == DiagnosticSeverity.Error)));
+            new CSharpCompilationOptions(
+                OutputKind.DynamicallyLinkedLibrary, nullableContextOptions: NullableContextOptions.Enable)).Emit(
+                image);
+        Assert.True(result.Success,
+            string.Join('\n', result.Diagnostics.Where(found => found.Severity == DiagnosticSeverity.Error)));
         return MetadataReference.CreateFromImage(image.ToArray());
     }
 
@@ -105,7 +114,8 @@ static class Workbench
 
         sealed class Lines(IReadOnlyDictionary<string, string> values) : AnalyzerConfigOptions
         {
-            public override bool TryGetValue(string key, [System.Diagnostics.CodeAnalysis.NotNullWhen(true)] out string? value) =>
+            public override bool TryGetValue(
+                string key, [System.Diagnostics.CodeAnalysis.NotNullWhen(true)] out string? value) =>
                 values.TryGetValue(key, out value);
         }
     }

@@ -29,14 +29,17 @@ public sealed class FreshProjectTests(ITestOutputHelper output) : IDisposable
 
         // After "Build succeeded" the SDK says every warning a second time.
         string once = built[..built.IndexOf("Build succeeded", StringComparison.Ordinal)];
-        Assert.Equal(["ASZ1001", "ASZ2001"], Regex.Matches(once, @"warning (ASZ\d{4})").Select(found => found.Groups[1].Value).Order(StringComparer.Ordinal));
+        Assert.Equal(
+            ["ASZ1001", "ASZ2001"], Regex.Matches(once, @"warning (ASZ\d{4})").Select(found => found.Groups[1].Value)
+            .Order(StringComparer.Ordinal));
         Assert.DoesNotContain("AD0001", built, StringComparison.Ordinal);
         Assert.Contains("Total: 3, Errors: 0, Failed: 0", ran, StringComparison.Ordinal);
     }
 
     // Into folders of its own, so that a build of the repository going on beside it is not disturbed.
     async Task Pack(string project) => await Run(
-        Root, "pack", project, "-o", Path.Combine(_own, "feed"), $"-p:Version={Version}", $"-p:ArtifactsPath={Path.Combine(_own, "build")}");
+        Root, "pack", project, "-o", Path.Combine(_own, "feed"), $"-p:Version={Version}",
+            $"-p:ArtifactsPath={Path.Combine(_own, "build")}");
 
     // What is fresh comes from the feed into a folder of its own; everything else from the packages that are there
     // already.

@@ -54,9 +54,11 @@ sealed class AssertionFinder
         IOperation inner = assertion;
         foreach (IOperation outer in around)
         {
-            if (outer is IBlockOperation block && block.Operations.TakeWhile(statement => statement != inner).Any(MayLeave))
+            if (outer is IBlockOperation block
+                && block.Operations.TakeWhile(statement => statement != inner).Any(MayLeave))
                 return false;
-            if (outer is not (IBlockOperation or IExpressionStatementOperation or ILoopOperation or IUsingOperation or ILockOperation))
+            if (outer is not (
+                IBlockOperation or IExpressionStatementOperation or ILoopOperation or IUsingOperation or ILockOperation))
                 return false;
             inner = outer;
         }
@@ -69,8 +71,10 @@ sealed class AssertionFinder
         {
             IReturnOperation returning => !returning.IsInsideFunction(),
             IBranchOperation { BranchKind: BranchKind.GoTo } => true,
-            IBranchOperation branch => !branch.Around().TakeWhile(outer => statement.Syntax.Span.Contains(outer.Syntax.Span))
-                .Any(outer => outer is ILoopOperation || (outer is ISwitchOperation && branch.BranchKind == BranchKind.Break)),
+            IBranchOperation branch => !branch.Around()
+                .TakeWhile(outer => statement.Syntax.Span.Contains(outer.Syntax.Span))
+                .Any(outer => outer is ILoopOperation
+                    || (outer is ISwitchOperation && branch.BranchKind == BranchKind.Break)),
             _ => false,
         });
 }

@@ -41,11 +41,15 @@ sealed record AssertionReading(Location Location, Location? TrialsLiteral) : Rea
 
     /// <summary>Trials from which on the same band of shares is red seldom enough; null when it never is.</summary>
     public long? TrialsNeeded(double risk) =>
-        MoreTrialsHelp ? Question.Ask(() => ProportionAssessment.TrialsNeeded(Shares, Rate.Value, Chance.OfOneRun(risk, Runs))) : null;
+        MoreTrialsHelp
+            ? Question.Ask(() => ProportionAssessment.TrialsNeeded(Shares, Rate.Value, Chance.OfOneRun(risk, Runs)))
+            : null;
 
     /// <summary>
     /// The nearest wrong rate that one evaluation catches with this confidence; null when there is none.
     /// </summary>
     public double? RateCaught(double confidence) =>
-        Question.Ask(() => ProportionAssessment.SmallestDefectCaught(Trials, AcceptLow, AcceptHigh, Rate.Value, confidence)) + Rate.Value;
+        Question.Ask(
+            () => ProportionAssessment.SmallestDefectCaught(
+            Trials, AcceptLow, AcceptHigh, Rate.Value, confidence)) + Rate.Value;
 }

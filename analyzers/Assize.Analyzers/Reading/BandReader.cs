@@ -30,7 +30,8 @@ static class BandReader
 
         long trials = count.Passes;
         long? low = interval.Low is { } lower ? Edge(lower, trials, successes => Passes(successes)) : 0;
-        long? high = interval.High is { } upper ? trials - Edge(trials - upper, trials, successes => Passes(trials - successes)) : trials;
+        long? high = interval.High is { } upper
+            ? trials - Edge(trials - upper, trials, successes => Passes(trials - successes)) : trials;
         if (low is not { } first || high is not { } last || first >= last || !IsConsistent(Passes, first, last, trials))
             return null;
 
@@ -86,7 +87,8 @@ static class BandReader
         return rounded is > 0 and < 1 ? rounded : null;
     }
 
-    static Interval Shares(Interval counts, long trials) => counts with { Low = counts.Low / trials, High = counts.High / trials };
+    static Interval Shares(Interval counts, long trials) =>
+        counts with { Low = counts.Low / trials, High = counts.High / trials };
 
     // Beyond this an int counter wraps and a float counter stands still.
     static bool Holds(Sum count) => count.Kind switch

@@ -19,7 +19,8 @@ sealed class ClaimReader
     ClaimReader(INamedTypeSymbol claim, INamedTypeSymbol? terms) => (_claim, _terms) = (claim, terms);
 
     /// <summary>A reader for a compilation; null when it does not use the kit.</summary>
-    public static ClaimReader? For(Compilation compilation) => compilation.GetTypeByMetadataName("Assize.Claim") is { } claim
+    public static ClaimReader? For(Compilation compilation) =>
+        compilation.GetTypeByMetadataName("Assize.Claim") is { } claim
         ? new ClaimReader(claim, compilation.GetTypeByMetadataName("Assize.ClaimTerms"))
         : null;
 
@@ -31,7 +32,8 @@ sealed class ClaimReader
     public ClaimReading? Read(IInvocationOperation made, CancellationToken cancellation)
     {
         var evaluator = new Evaluator(
-            new Writes(Body(made)), ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default), cancellation);
+            new Writes(Body(made)), ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default),
+                cancellation);
         double? Number(IOperation? value) =>
             value is not null && evaluator.Read(value) is Term.Known known ? Arithmetic.Number(known.Value) : null;
 
@@ -68,7 +70,8 @@ sealed class ClaimReader
             return new ClaimReading(made.Syntax.GetLocation(), null, null, null, plan.Refusal);
         if (trialsCall is null || ValueOf(trialsCall) is not { } argument || number(argument) is not { } trials)
             return null;
-        return new ClaimReading(argument.Syntax.GetLocation(), LiteralReader.Of(argument), (long)trials, plan.Needed, null);
+        return new ClaimReading(
+            argument.Syntax.GetLocation(), LiteralReader.Of(argument), (long)trials, plan.Needed, null);
     }
 
     static Func<Edges>? EdgesOf(IInvocationOperation made, Func<IOperation?, double?> number)
@@ -76,7 +79,8 @@ sealed class ClaimReader
         if (number(Argument(made, "target")) is not { } target)
             return null;
         double? defect = number(Argument(made, "defect"));
-        bool isDefault = made.Arguments.Any(argument => argument is { Parameter.Name: "defect", ArgumentKind: ArgumentKind.DefaultValue });
+        bool isDefault = made.Arguments.Any(
+            argument => argument is { Parameter.Name: "defect", ArgumentKind: ArgumentKind.DefaultValue });
         if (made.TargetMethod.Name != "Rate")
             return defect is not { } distance ? null
                 : made.TargetMethod.Name == "RateAtLeast" ? () => Edges.AtLeast(Domain.Rate, target, distance)
@@ -119,14 +123,19 @@ sealed class ClaimReader
 
     bool IsTerm(IMethodSymbol method) =>
         (_terms is not null && SymbolEqualityComparer.Default.Equals(method.ContainingType, _terms))
-        || (method.ContainingType is { } type && type.ContainingNamespace?.Name == "Assize" && method.Name.StartsWith("With", StringComparison.Ordinal));
+        || (method.ContainingType is { } type && type.ContainingNamespace?.Name == "Assize"
+            && method.Name.StartsWith("With", StringComparison.Ordinal));
 
     // The one value of a term: the claim itself comes first where the term is an extension.
     static IOperation? ValueOf(IInvocationOperation term) =>
-        term.Arguments.FirstOrDefault(argument => argument.Parameter?.Ordinal == (term.Instance is null ? 1 : 0))?.Value;
+        term.Arguments.FirstOrDefault(
+            argument => argument.Parameter?.Ordinal == (term.Instance is null ? 1 : 0))?.Value;
 
     static IOperation? Argument(IInvocationOperation call, string parameter) =>
-        call.Arguments.FirstOrDefault(argument => argument.Parameter?.Name == parameter)?.Value is { ConstantValue: not { HasValue: true, Value: null } } value
+        call.Arguments.FirstOrDefault(
+            argument =>
+            argument.Parameter?.Name == parameter)?.Value is { ConstantValue: not { HasValue: true,
+            Value: null } } value
             ? value
             : null;
 

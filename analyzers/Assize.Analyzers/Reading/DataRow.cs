@@ -13,7 +13,8 @@ sealed record DataRow(ImmutableArray<TypedConstant> Values)
     public static DataRow Of(AttributeData attribute)
     {
         var arguments = attribute.ConstructorArguments;
-        return new DataRow(arguments is { Length: 1 } && arguments[0].Kind == TypedConstantKind.Array && !arguments[0].IsNull
+        return new DataRow(
+            arguments is { Length: 1 } && arguments[0].Kind == TypedConstantKind.Array && !arguments[0].IsNull
             ? arguments[0].Values
             : arguments);
     }

@@ -28,7 +28,8 @@ sealed class DrawReader
         IObjectCreationOperation created => _types.IsRandom(created.Type),
         IPropertyReferenceOperation property => _types.IsShared(property.Property),
         ILocalReferenceOperation local => _writes.To(local.Local) is { Count: > 0 } writes
-            && writes.All(write => write.Kind == WriteKind.Set && write.Value!.Unwrapped() is not ILocalReferenceOperation
+            && writes.All(
+                write => write.Kind == WriteKind.Set && write.Value!.Unwrapped() is not ILocalReferenceOperation
                 && IsPlainGenerator(write.Value)),
         IFieldReferenceOperation field => FieldReader.Initial(field) is { } initial && IsPlainGenerator(initial),
         _ => false,
@@ -101,12 +102,14 @@ sealed class DrawReader
             return call.Instance is null || !IsStubbed(call.Instance);
         if (call.Arguments.Any(argument => _types.IsGenerator(argument.Value.Unwrapped().Type)))
             return call.Arguments.All(argument => !IsStubbed(argument.Value));
-        if (method.ReturnsVoid || RandomTypes.IsFramework(method.ContainingType) || method.MethodKind is MethodKind.DelegateInvoke or MethodKind.LocalFunction)
+        if (method.ReturnsVoid || RandomTypes.IsFramework(method.ContainingType)
+            || method.MethodKind is MethodKind.DelegateInvoke or MethodKind.LocalFunction)
             return false;
         var scan = SourceScan.Of(method);
         return !scan.IsVisible || scan.MentionsGenerator;
     }
 
     bool IsStubbed(IOperation generator) => generator.Unwrapped() is ILocalReferenceOperation local
-        && _writes.To(local.Local).Any(write => write.Value?.Unwrapped().Type is { } type && !type.DeclaringSyntaxReferences.IsEmpty);
+        && _writes.To(local.Local).Any(
+            write => write.Value?.Unwrapped().Type is { } type && !type.DeclaringSyntaxReferences.IsEmpty);
 }

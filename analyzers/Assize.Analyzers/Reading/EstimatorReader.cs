@@ -30,5 +30,6 @@ static class EstimatorReader
         : new Unknown("too many trials for the counter");
 
     // A bound that is itself drawn is no bound.
-    static bool OutsideDraws(Term condition, Sum count) => condition.With(count, Zero(count.Kind)).Parts().Any(part => part is Draw or Unknown);
+    static bool OutsideDraws(Term condition, Sum count) => condition.With(count, Zero(count.Kind)).Parts()
+        .Any(part => part is Draw or Unknown);
 }

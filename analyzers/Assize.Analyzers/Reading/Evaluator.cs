@@ -44,7 +44,8 @@ sealed class Evaluator
         {
             ILocalReferenceOperation local => _variables.Read(local.Local, local),
             IParameterReferenceOperation parameter => _variables.Read(parameter.Parameter, parameter),
-            IFieldReferenceOperation field => FieldReader.Initial(field) is { } initial ? Read(initial) : new Unknown("field"),
+            IFieldReferenceOperation field => FieldReader.Initial(field) is { } initial ? Read(initial)
+                : new Unknown("field"),
             IConversionOperation conversion => ReadConversion(conversion),
             IUnaryOperation { OperatorMethod: null } unary => ReadUnary(unary),
             IBinaryOperation { OperatorMethod: null, IsLifted: false } binary => ReadBinary(binary),
@@ -107,18 +108,22 @@ sealed class Evaluator
 
     Term? ReadPattern(IPatternOperation pattern, Term value, NumberKind kind) => pattern switch
     {
-        IRelationalPatternOperation relation when OperatorOf(relation.OperatorKind) is { } op => Of(op, kind, value, Read(relation.Value)),
+        IRelationalPatternOperation relation when OperatorOf(relation.OperatorKind) is { } op =>
+            Of(op, kind, value, Read(relation.Value)),
         IConstantPatternOperation constant => Of(Operator.Equal, kind, value, Read(constant.Value)),
         INegatedPatternOperation negated => ReadPattern(negated.Pattern, value, kind) is { } inner ? Not(inner) : null,
         IBinaryPatternOperation { OperatorKind: BinaryOperatorKind.And or BinaryOperatorKind.Or } joined
-            when ReadPattern(joined.LeftPattern, value, kind) is { } left && ReadPattern(joined.RightPattern, value, kind) is { } right =>
-            Of(joined.OperatorKind == BinaryOperatorKind.And ? Operator.And : Operator.Or, NumberKind.Boolean, left, right),
+            when ReadPattern(joined.LeftPattern, value, kind) is { } left
+                && ReadPattern(joined.RightPattern, value, kind) is { } right =>
+            Of(joined.OperatorKind == BinaryOperatorKind.And ? Operator.And : Operator.Or, NumberKind.Boolean, left,
+                right),
         _ => null,
     };
 
     // Whatever calls something may differ in every pass; LawReader decides whether it is random. The rest is not
     // followed.
-    static Term NewDraw(IOperation operation) => operation.DescendantsAndSelf().Any(part => part is IInvocationOperation)
+    static Term NewDraw(IOperation operation) => operation.DescendantsAndSelf()
+        .Any(part => part is IInvocationOperation)
         ? new Draw(operation.Syntax, Arithmetic.KindOf(operation.Type), operation)
         : new Unknown(operation.Kind.ToString());
 

@@ -15,7 +15,8 @@ static class FieldReader
         IFieldSymbol field = reference.Field;
         if (!field.IsReadOnly && field.DeclaredAccessibility != Accessibility.Private)
             return null;
-        if (reference.SemanticModel is not { } model || Declaration(field, model.SyntaxTree) is not { Initializer.Value: { } value } declaration)
+        if (reference.SemanticModel is not { } model
+            || Declaration(field, model.SyntaxTree) is not { Initializer.Value: { } value } declaration)
             return null;
         // A second part of the type may lie in another file, where a constructor may write.
         if (field.ContainingType.DeclaringSyntaxReferences.Length != 1 || IsWritten(field, declaration))
@@ -24,7 +25,8 @@ static class FieldReader
     }
 
     public static VariableDeclaratorSyntax? Declaration(IFieldSymbol field, SyntaxTree tree) =>
-        field.DeclaringSyntaxReferences.FirstOrDefault(reference => reference.SyntaxTree == tree)?.GetSyntax() as VariableDeclaratorSyntax;
+        field.DeclaringSyntaxReferences.FirstOrDefault(
+            reference => reference.SyntaxTree == tree)?.GetSyntax() as VariableDeclaratorSyntax;
 
     /// <summary>
     /// Every expression of the type that is assigned to a field of this name; by name, so rather one too many.
@@ -36,7 +38,8 @@ static class FieldReader
     static bool IsWritten(IFieldSymbol field, SyntaxNode declaration) =>
         TypeAround(declaration).DescendantNodes().Any(node => node switch
         {
-            AssignmentExpressionSyntax assignment => assignment.Left.DescendantNodesAndSelf().Any(part => NameOf(part) == field.Name),
+            AssignmentExpressionSyntax assignment => assignment.Left.DescendantNodesAndSelf()
+                .Any(part => NameOf(part) == field.Name),
             PrefixUnaryExpressionSyntax step when step.OperatorToken.Kind() is SyntaxKind.PlusPlusToken or SyntaxKind.MinusMinusToken =>
                 NameOf(step.Operand) == field.Name,
             PostfixUnaryExpressionSyntax step => NameOf(step.Operand) == field.Name,

@@ -24,7 +24,8 @@ sealed class GuardReader
             {
                 IBlockOperation block => SkippedOver(block, inner, step, kind),
                 IConditionalOperation choice when inner == choice.Condition => new Unknown("changed in a condition"),
-                IConditionalOperation choice when inner == choice.WhenTrue => Choose(_evaluator.Read(choice.Condition), step, Zero(kind)),
+                IConditionalOperation choice when inner == choice.WhenTrue =>
+                    Choose(_evaluator.Read(choice.Condition), step, Zero(kind)),
                 IConditionalOperation choice => Choose(Not(_evaluator.Read(choice.Condition)), step, Zero(kind)),
                 ILoopOperation or IExpressionStatementOperation or ILockOperation or IUsingOperation => step,
                 _ => new Unknown("under " + outer.Kind),

@@ -13,10 +13,12 @@ sealed class Isolation
     Isolation(Term part, bool truncates) => (_part, _truncates) = (part, truncates);
 
     /// <summary>Where the condition holds, truncation and rounding included.</summary>
-    public static Interval? Solve(Term condition, Term part) => new Isolation(part, truncates: true).Solve(condition, holds: true);
+    public static Interval? Solve(Term condition, Term part) => new Isolation(part, truncates: true)
+        .Solve(condition, holds: true);
 
     /// <summary>Where the condition was meant to hold: as if its arithmetic never truncated.</summary>
-    public static Interval? Meant(Term condition, Term part) => new Isolation(part, truncates: false).Solve(condition, holds: true);
+    public static Interval? Meant(Term condition, Term part) => new Isolation(part, truncates: false)
+        .Solve(condition, holds: true);
 
     Interval? Solve(Term condition, bool holds)
     {
@@ -72,12 +74,14 @@ sealed class Isolation
 
     // From a fraction to a whole number C# cuts towards zero; below zero nothing is proposed.
     Interval? Converted(Apply apply, Operator op, double bound) =>
-        IsWhole(apply.Kind) && _truncates && KindOf(apply.Left) is NumberKind.Single or NumberKind.Double or NumberKind.Decimal
+        IsWhole(apply.Kind) && _truncates
+            && KindOf(apply.Left) is NumberKind.Single or NumberKind.Double or NumberKind.Decimal
             ? Cut(apply.Left, op, bound, 1)
             : Bound(apply.Left, op, bound);
 
     Interval? Divided(Apply apply, Operator op, double bound) =>
-        apply.Right is Known divisor && Arithmetic.Number(divisor.Value) is > 0 and { } by ? Cut(apply.Left, op, bound, by) : null;
+        apply.Right is Known divisor && Arithmetic.Number(divisor.Value) is > 0 and { } by
+            ? Cut(apply.Left, op, bound, by) : null;
 
     // For x ≥ 0: ⌊x/d⌋ ≤ h ⇔ x < (⌊h⌋+1)·d and ⌊x/d⌋ ≥ l ⇔ x ≥ ⌈l⌉·d.
     Interval? Cut(Term term, Operator op, double bound, double by) => op switch
@@ -110,9 +114,11 @@ sealed class Isolation
     {
         if (term is Known known)
             return Arithmetic.Number(known.Value) is { } number ? (0, null, number) : null;
-        if (term is not Apply { Operator: Operator.Add or Operator.Subtract or Operator.Multiply or Operator.Divide, Right: { } right } apply
+        if (term is not Apply { Operator: Operator.Add or Operator.Subtract or Operator.Multiply or Operator.Divide,
+            Right: { } right } apply
             || (apply.Operator == Operator.Divide && IsWhole(apply.Kind) && _truncates))
-            return term is Apply { Operator: Operator.Convert } convert && !IsWhole(convert.Kind) ? Slope(convert.Left) : (1, term, 0);
+            return term is Apply { Operator: Operator.Convert } convert && !IsWhole(convert.Kind) ? Slope(convert.Left)
+                : (1, term, 0);
         if (Slope(apply.Left) is not { } a || Slope(right) is not { } b)
             return null;
         return apply.Operator switch

@@ -14,7 +14,8 @@ static class LiteralReader
     {
         ILiteralOperation { Syntax: LiteralExpressionSyntax literal } => literal.GetLocation(),
         ILocalReferenceOperation local => Initializer(local.Local, number.Syntax.SyntaxTree),
-        IFieldReferenceOperation { Field: { } field } when field.IsConst || field.IsReadOnly => Initializer(field, number.Syntax.SyntaxTree),
+        IFieldReferenceOperation { Field: { } field } when field.IsConst || field.IsReadOnly =>
+            Initializer(field, number.Syntax.SyntaxTree),
         _ => null,
     };
 

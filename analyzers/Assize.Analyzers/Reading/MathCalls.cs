@@ -10,19 +10,25 @@ static class MathCalls
     public static Term? Read(IInvocationOperation call, Evaluator evaluator)
     {
         var method = call.TargetMethod;
-        if (method is not { IsStatic: true, ContainingType: { ContainingNamespace: { Name: "System", ContainingNamespace.IsGlobalNamespace: true } } type })
+        if (method is not { IsStatic: true,
+            ContainingType: { ContainingNamespace: { Name: "System",
+            ContainingNamespace.IsGlobalNamespace: true } } type })
             return null;
         return (type.Name, method.Name, method.Parameters.Length) switch
         {
             ("Math" or "Double", "Abs", 1) => Of(Operator.Absolute, Arithmetic.KindOf(call.Type), Argument(0)),
             ("Math" or "Double", "Sqrt", 1) => evaluator.Root(Argument(0)),
-            ("Math" or "Double", "Round", 1) => Of(Operator.Round, Arithmetic.KindOf(call.Type), Argument(0), new Known(0)),
+            ("Math" or "Double", "Round", 1) =>
+                Of(Operator.Round, Arithmetic.KindOf(call.Type), Argument(0), new Known(0)),
             ("Math" or "Double", "Round", 2) when Argument(1) is Known { Value: int } digits =>
                 Of(Operator.Round, Arithmetic.KindOf(call.Type), Argument(0), digits),
-            ("Math", "Pow", 2) when (Argument(0), Argument(1)) is (Known { Value: double x }, Known { Value: double y }) =>
+            ("Math", "Pow", 2) when (Argument(0), Argument(1)) is (
+                Known { Value: double x }, Known { Value: double y }) =>
                 new Known(Math.Pow(x, y)),
-            ("Math", "Min", 2) when (Argument(0), Argument(1)) is (Known a, Known b) => Lesser(a, b, Operator.LessOrEqual),
-            ("Math", "Max", 2) when (Argument(0), Argument(1)) is (Known a, Known b) => Lesser(a, b, Operator.GreaterOrEqual),
+            ("Math", "Min", 2) when (Argument(0), Argument(1)) is (Known a, Known b) =>
+                Lesser(a, b, Operator.LessOrEqual),
+            ("Math", "Max", 2) when (Argument(0), Argument(1)) is (Known a, Known b) =>
+                Lesser(a, b, Operator.GreaterOrEqual),
             ("Math", "Floor", 1) when Argument(0) is Known { Value: double x } => new Known(Math.Floor(x)),
             ("Math", "Ceiling", 1) when Argument(0) is Known { Value: double x } => new Known(Math.Ceiling(x)),
             ("Convert", "ToDouble", 1) when Arithmetic.KindOf(method.Parameters[0].Type) is > NumberKind.Boolean =>
@@ -32,11 +38,13 @@ static class MathCalls
             _ => null,
         };
 
-        Term Argument(int ordinal) => call.Arguments.FirstOrDefault(argument => argument.Parameter?.Ordinal == ordinal) is { } argument
+        Term Argument(int ordinal) =>
+            call.Arguments.FirstOrDefault(argument => argument.Parameter?.Ordinal == ordinal) is { } argument
             ? evaluator.Read(argument.Value)
             : new Unknown("no such argument");
     }
 
     static Term Lesser(Known a, Known b, Operator keeps) =>
-        Of(keeps, NumberKind.Other, a, b) is Known { Value: bool first } ? first ? a : b : new Unknown("not comparable");
+        Of(keeps, NumberKind.Other, a, b) is Known { Value: bool first } ? first ? a : b
+            : new Unknown("not comparable");
 }

@@ -10,7 +10,8 @@ static class OperationWalk
     /// <summary>The operations around this one, innermost first, up to and without the nearest function.</summary>
     public static IEnumerable<IOperation> Around(this IOperation operation)
     {
-        for (IOperation? outer = operation.Parent; outer is not (null or IMethodBodyBaseOperation) && !IsFunction(outer); outer = outer.Parent)
+        for (IOperation? outer = operation.Parent; outer is not (null or IMethodBodyBaseOperation)
+            && !IsFunction(outer); outer = outer.Parent)
             yield return outer;
     }
 

@@ -13,7 +13,8 @@ static class Pairing
             Requirement first = requirements[at];
             if (taken.Contains(first))
                 continue;
-            Requirement? other = requirements.Skip(at + 1).FirstOrDefault(later => !taken.Contains(later) && ArePair(first, later));
+            Requirement? other = requirements.Skip(at + 1).FirstOrDefault(
+                later => !taken.Contains(later) && ArePair(first, later));
             if (other is null)
             {
                 yield return first;
@@ -21,7 +22,8 @@ static class Pairing
             }
 
             taken.Add(other);
-            yield return first with { Condition = Both(first.Condition, other.Condition), TookRoot = first.TookRoot || other.TookRoot };
+            yield return first with { Condition = Both(first.Condition, other.Condition), TookRoot = first.TookRoot
+                || other.TookRoot };
         }
     }
 

@@ -30,7 +30,8 @@ sealed class RandomTypes
         return false;
     }
 
-    public bool IsShared(IPropertySymbol property) => property is { IsStatic: true, Name: "Shared" } && IsRandom(property.ContainingType);
+    public bool IsShared(IPropertySymbol property) => property is { IsStatic: true, Name: "Shared" }
+        && IsRandom(property.ContainingType);
 
     /// <summary>
     /// Whether a type belongs to the platform, a test framework or a library of stubs: never the code under test.
@@ -43,5 +44,6 @@ sealed class RandomTypes
         return space?.Name is "System" or "Microsoft" or "Xunit" or "NUnit" or "Moq" or "NSubstitute" or "FakeItEasy";
     }
 
-    static bool Is(ITypeSymbol? type, ITypeSymbol? known) => known is not null && SymbolEqualityComparer.Default.Equals(type, known);
+    static bool Is(ITypeSymbol? type, ITypeSymbol? known) => known is not null
+        && SymbolEqualityComparer.Default.Equals(type, known);
 }

@@ -42,7 +42,8 @@ sealed class SeedReader
         IOperation value = argument.Value.Unwrapped();
         if (value is IArrayCreationOperation or IDelegateCreationOperation or IAnonymousFunctionOperation)
             return OfParts(value);
-        return value.Type is { IsReferenceType: true } type && (_types.IsGenerator(type) || !RandomTypes.IsFramework(type))
+        return value.Type is { IsReferenceType: true } type
+            && (_types.IsGenerator(type) || !RandomTypes.IsFramework(type))
             ? Origin(value)
             : Seeding.Inside;
     }
@@ -57,7 +58,8 @@ sealed class SeedReader
     static Seeding OfSeed(IOperation seed)
     {
         string text = seed.Syntax.ToString();
-        return text.Contains("TickCount") || text.Contains("Now") || text.Contains("NewGuid") || text.Contains("GetTimestamp")
+        return text.Contains("TickCount") || text.Contains("Now") || text.Contains("NewGuid")
+            || text.Contains("GetTimestamp")
             ? Seeding.TimeBased
             : Seeding.Pinned;
     }
@@ -74,7 +76,8 @@ sealed class SeedReader
             IPropertyReferenceOperation property when _types.IsShared(property.Property) => Seeding.Shared,
             ILocalReferenceOperation local => OfLocal(local.Local),
             IFieldReferenceOperation field => OfField(field),
-            IInstanceReferenceOperation self => self.Type is { } type && SourceScan.Of(type).SeedsGenerator ? Seeding.Pinned : Seeding.Inside,
+            IInstanceReferenceOperation self => self.Type is { } type && SourceScan.Of(type).SeedsGenerator
+                ? Seeding.Pinned : Seeding.Inside,
             _ => Seeding.Unclear,
         };
     }
@@ -85,10 +88,13 @@ sealed class SeedReader
             return created.Arguments.IsEmpty ? Seeding.Fresh : OfSeed(created.Arguments[0].Value);
         if (created.Type is { } type && SourceScan.Of(type).SeedsGenerator)
             return Seeding.Pinned;
-        return Worst([.. created.Arguments.Select(OfArgument), created.Initializer is null ? Seeding.Inside : OfInitializer(created.Initializer)]);
+        return Worst(
+            [.. created.Arguments.Select(OfArgument), created.Initializer is null ? Seeding.Inside
+            : OfInitializer(created.Initializer)]);
     }
 
-    Seeding OfInitializer(IObjectOrCollectionInitializerOperation initializer) => Worst(initializer.Initializers.Select(part =>
+    Seeding OfInitializer(IObjectOrCollectionInitializerOperation initializer) =>
+        Worst(initializer.Initializers.Select(part =>
         part is ISimpleAssignmentOperation { Target: IMemberReferenceOperation member, Value: var value }
             ? member.Member.Name.IndexOf("seed", StringComparison.OrdinalIgnoreCase) >= 0 ? OfSeed(value)
                 : _types.IsGenerator(value.Unwrapped().Type) ? Origin(value) : Seeding.Inside
@@ -112,7 +118,8 @@ sealed class SeedReader
             || reference.Field.ContainingType.DeclaringSyntaxReferences.Length != 1
             || FieldReader.Declaration(reference.Field, model.SyntaxTree) is not { } declaration)
             return Seeding.Unclear;
-        var values = FieldReader.Assignments(reference.Field, declaration).Select(assignment => assignment.Right).ToList();
+        var values = FieldReader.Assignments(reference.Field, declaration).Select(assignment => assignment.Right)
+            .ToList();
         if (declaration.Initializer is { Value: var initial })
             values.Add(initial);
         return values.Count == 0 ? Seeding.Unclear : Worst(values.Select(value => OfSyntax(value, model)));

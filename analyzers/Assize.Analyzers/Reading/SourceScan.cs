@@ -13,7 +13,8 @@ sealed record SourceScan(bool IsVisible, bool MentionsGenerator, bool SeedsGener
 {
     const int MostBases = 8;
 
-    static readonly HashSet<string> Generators = ["Random", "RandomNumberGenerator", "NextDouble", "NextSingle", "NewGuid"];
+    static readonly HashSet<string> Generators =
+        ["Random", "RandomNumberGenerator", "NextDouble", "NextSingle", "NewGuid"];
 
     /// <summary>Of a method, with the type that it works on.</summary>
     public static SourceScan Of(IMethodSymbol method) =>
@@ -35,9 +36,11 @@ sealed record SourceScan(bool IsVisible, bool MentionsGenerator, bool SeedsGener
         foreach (SyntaxReference reference in references)
         {
             var nodes = reference.GetSyntax().DescendantNodes().ToList();
-            bool mentions = nodes.OfType<SimpleNameSyntax>().Any(name => Generators.Contains(name.Identifier.ValueText));
+            bool mentions = nodes.OfType<SimpleNameSyntax>().Any(
+                name => Generators.Contains(name.Identifier.ValueText));
             bool seeds = nodes.OfType<BaseObjectCreationExpressionSyntax>().Any(created => Seeds(created, mentions))
-                || nodes.OfType<ConstructorInitializerSyntax>().Any(initializer => initializer.ArgumentList.Arguments.Count > 0);
+                || nodes.OfType<ConstructorInitializerSyntax>().Any(
+                    initializer => initializer.ArgumentList.Arguments.Count > 0);
             scan = scan.With(new SourceScan(true, mentions, seeds));
         }
 
@@ -45,7 +48,8 @@ sealed record SourceScan(bool IsVisible, bool MentionsGenerator, bool SeedsGener
     }
 
     SourceScan With(SourceScan other) => new(
-        IsVisible || other.IsVisible, MentionsGenerator || other.MentionsGenerator, SeedsGenerator || other.SeedsGenerator);
+        IsVisible || other.IsVisible, MentionsGenerator || other.MentionsGenerator, SeedsGenerator
+            || other.SeedsGenerator);
 
     static bool Seeds(BaseObjectCreationExpressionSyntax created, bool mentions) =>
         created.ArgumentList is { Arguments.Count: > 0 }

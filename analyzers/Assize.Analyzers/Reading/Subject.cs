@@ -26,7 +26,8 @@ sealed class Subject
         var runs = new Runs(_runs.Repeats * requirement.Repeats, _runs.Tries);
         if (runs is { Repeats: > 1, Tries: > 1 })
             return null;
-        if (Question.AskFor(() => ProportionAssessment.Assess(band.Count.Passes, band.Low, band.High, rate.Value)) is not { } once)
+        if (Question.AskFor(
+            () => ProportionAssessment.Assess(band.Count.Passes, band.Low, band.High, rate.Value)) is not { } once)
             return null;
         return new AssertionReading(requirement.Site.Syntax.GetLocation(), TrialsLiteral(band))
         {
@@ -49,7 +50,8 @@ sealed class Subject
         .DefaultIfEmpty(Seeding.Unclear)
         .Max();
 
-    static Location? TrialsLiteral(Band band) => band.Count.Loops.Items is { Length: 1 } loops && TrialCountReader.Bound(loops[0]) is { } bound
+    static Location? TrialsLiteral(Band band) => band.Count.Loops.Items is { Length: 1 } loops
+        && TrialCountReader.Bound(loops[0]) is { } bound
         ? LiteralReader.Of(bound)
         : null;
 }

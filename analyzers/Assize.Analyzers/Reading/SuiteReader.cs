@@ -46,7 +46,8 @@ sealed class SuiteReader
     }
 
     IEnumerable<AssertionReading> ReadRow(
-        IMethodSymbol method, TestFramework framework, IOperation body, Writes writes, DataRow? row, Runs runs, CancellationToken cancellation)
+        IMethodSymbol method, TestFramework framework, IOperation body, Writes writes, DataRow? row, Runs runs,
+            CancellationToken cancellation)
     {
         var known = row?.Bind(method) ?? ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default);
         var requirements = new List<Requirement>();

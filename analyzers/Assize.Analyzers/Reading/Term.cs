@@ -35,9 +35,11 @@ abstract record Term
     /// <summary>Not followed. Absorbs every term it is part of.</summary>
     public sealed record Unknown(string Why) : Term;
 
-    public static Term One(NumberKind kind) => Arithmetic.Convert(kind, 1) is { } one ? new Known(one) : new Unknown("not a number");
+    public static Term One(NumberKind kind) => Arithmetic.Convert(kind, 1) is { } one ? new Known(one)
+        : new Unknown("not a number");
 
-    public static Term Zero(NumberKind kind) => Arithmetic.Convert(kind, 0) is { } zero ? new Known(zero) : new Unknown("not a number");
+    public static Term Zero(NumberKind kind) => Arithmetic.Convert(kind, 0) is { } zero ? new Known(zero)
+        : new Unknown("not a number");
 
     /// <summary>The operator applied, folded where both sides are known.</summary>
     public static Term Of(Operator op, NumberKind kind, Term left, Term? right = null)
@@ -69,7 +71,8 @@ abstract record Term
             return otherwise;
         if (condition is Known { Value: bool decided })
             return decided ? then : otherwise;
-        return IsZero(then) && IsOne(otherwise) ? new If(Not(condition), otherwise, then) : new If(condition, then, otherwise);
+        return IsZero(then) && IsOne(otherwise) ? new If(Not(condition), otherwise, then)
+            : new If(condition, then, otherwise);
     }
 
     public static Term Not(Term condition) => Of(Operator.Not, NumberKind.Boolean, condition);

@@ -33,15 +33,19 @@ abstract class TestFramework
     /// How often the framework runs the test and judges by all or the best run; null when that is not known.
     /// </summary>
     public virtual Runs? RunsOf(AttributeData attribute) =>
-        attribute.AttributeClass?.Name is { } name && (Has(name, "Retry") || Has(name, "Repeat") || Has(name, "Flaky")) ? null : Runs.Once;
+        attribute.AttributeClass?.Name is { } name && (Has(name, "Retry") || Has(name, "Repeat") || Has(name, "Flaky"))
+            ? null : Runs.Once;
 
     protected static bool Has(string text, string word) => text.IndexOf(word, StringComparison.OrdinalIgnoreCase) >= 0;
 
-    protected static bool IsIn(INamedTypeSymbol type, string space) => type.ContainingNamespace?.ToDisplayString() == space;
+    protected static bool IsIn(INamedTypeSymbol type, string space) =>
+        type.ContainingNamespace?.ToDisplayString() == space;
 
-    protected static Requirement Demand(Term condition, IOperation site, Term? meant = null) => new(condition, meant, site, 1, false);
+    protected static Requirement Demand(Term condition, IOperation site, Term? meant = null) =>
+        new(condition, meant, site, 1, false);
 
     /// <summary>|expected − actual| ≤ tolerance, in the order in which the frameworks subtract.</summary>
     protected static Term Within(NumberKind kind, Term expected, Term actual, Term tolerance) => Term.Of(
-        Operator.LessOrEqual, kind, Term.Of(Operator.Absolute, kind, Term.Of(Operator.Subtract, kind, expected, actual)), tolerance);
+        Operator.LessOrEqual, kind,
+            Term.Of(Operator.Absolute, kind, Term.Of(Operator.Subtract, kind, expected, actual)), tolerance);
 }

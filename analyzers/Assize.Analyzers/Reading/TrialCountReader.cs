@@ -45,7 +45,8 @@ sealed class TrialCountReader
         return loop switch
         {
             IForLoopOperation { Condition: IBinaryOperation condition } counted => Counted(counted, condition),
-            IWhileLoopOperation { ConditionIsTop: true, ConditionIsUntil: false, Condition: IBinaryOperation condition } checkedFirst =>
+            IWhileLoopOperation { ConditionIsTop: true, ConditionIsUntil: false,
+                Condition: IBinaryOperation condition } checkedFirst =>
                 Counted(checkedFirst, condition),
             IForEachLoopOperation each => RangeCount(each) is { } count ? Whole(count) : null,
             _ => null,
@@ -104,16 +105,19 @@ sealed class TrialCountReader
             return null;
         return IsBefore(loop, before)
             ? Whole(before.Value)
-            : _evaluator.ValueBefore(index, loop) is Term.Known { Value: int or long } known ? System.Convert.ToInt64(known.Value) : null;
+            : _evaluator.ValueBefore(index, loop) is Term.Known { Value: int or long } known
+                ? System.Convert.ToInt64(known.Value) : null;
     }
 
     static bool IsBefore(ILoopOperation loop, Write write) =>
-        loop is IForLoopOperation counted && counted.Before.Any(part => part.Syntax.Span.Contains(write.Site.Syntax.Span));
+        loop is IForLoopOperation counted
+            && counted.Before.Any(part => part.Syntax.Span.Contains(write.Site.Syntax.Span));
 
     static IOperation? RangeCount(IForEachLoopOperation each) =>
         each.Collection.Unwrapped() is IInvocationOperation
         {
-            TargetMethod: { Name: "Range" or "Repeat", ContainingType: { Name: "Enumerable", ContainingNamespace.Name: "Linq" } },
+            TargetMethod: { Name: "Range" or "Repeat",
+                ContainingType: { Name: "Enumerable", ContainingNamespace.Name: "Linq" } },
         } range
             ? range.Arguments.FirstOrDefault(argument => argument.Parameter?.Name == "count")?.Value
             : null;

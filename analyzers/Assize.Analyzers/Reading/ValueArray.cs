@@ -15,5 +15,6 @@ readonly struct ValueArray<T> : IEquatable<ValueArray<T>>
 
     public override bool Equals(object? obj) => obj is ValueArray<T> other && Equals(other);
 
-    public override int GetHashCode() => Items.Aggregate(Items.Length, (hash, item) => (hash * 31) + (item?.GetHashCode() ?? 0));
+    public override int GetHashCode() =>
+        Items.Aggregate(Items.Length, (hash, item) => (hash * 31) + (item?.GetHashCode() ?? 0));
 }

@@ -63,11 +63,14 @@ sealed class VariableReader
         or IVariableInitializerOperation or IUsingOperation or ILockOperation or ISimpleAssignmentOperation or IConversionOperation;
 
     static bool MayComeBetween(
-        Write write, Write? start, ImmutableArray<ILoopOperation> startLoops, IOperation use, ImmutableArray<ILoopOperation> around) =>
-        (write.Start >= (start?.End ?? 0) && write.Start < use.Syntax.SpanStart && !write.Site.Syntax.Span.Contains(use.Syntax.Span))
+        Write write, Write? start, ImmutableArray<ILoopOperation> startLoops, IOperation use,
+            ImmutableArray<ILoopOperation> around) =>
+        (write.Start >= (start?.End ?? 0) && write.Start < use.Syntax.SpanStart
+            && !write.Site.Syntax.Span.Contains(use.Syntax.Span))
         || write.Site.Loops().Any(loop => around.Contains(loop) && !startLoops.Contains(loop));
 
-    Term Added(Write write, ImmutableArray<ILoopOperation> startLoops, ImmutableArray<ILoopOperation> around, NumberKind kind)
+    Term Added(Write write, ImmutableArray<ILoopOperation> startLoops, ImmutableArray<ILoopOperation> around,
+        NumberKind kind)
     {
         if (write.Kind is not (WriteKind.Add or WriteKind.Subtract))
             return new Unknown("set on some paths only");
@@ -88,5 +91,6 @@ sealed class VariableReader
             : new Unknown("passes not constant");
     }
 
-    static NumberKind KindOf(ISymbol variable) => Arithmetic.KindOf((variable as ILocalSymbol)?.Type ?? (variable as IParameterSymbol)?.Type);
+    static NumberKind KindOf(ISymbol variable) =>
+        Arithmetic.KindOf((variable as ILocalSymbol)?.Type ?? (variable as IParameterSymbol)?.Type);
 }

@@ -95,7 +95,8 @@ sealed class Writes
             _writes.Add(symbol, writes = []);
         // A function runs when it is called, not where it is written.
         bool elsewhere = site.IsInsideFunction();
-        writes.Add(elsewhere && kind != WriteKind.Opaque ? new Write(WriteKind.Opaque, site, null) : new Write(kind, site, value));
+        writes.Add(elsewhere && kind != WriteKind.Opaque ? new Write(WriteKind.Opaque, site, null)
+            : new Write(kind, site, value));
     }
 
     static ISymbol? Variable(IOperation operation) => operation switch

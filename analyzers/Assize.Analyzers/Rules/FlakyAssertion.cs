@@ -18,7 +18,8 @@ sealed class FlakyAssertion : Rule
     }
 
     public override Diagnostic? Judge(Reading reading, Limits limits) =>
-        reading is AssertionReading { Seeding: < Seeding.Pinned } assertion && assertion.FalseFailure.Lower > limits.Risk
+        reading is AssertionReading { Seeding: < Seeding.Pinned } assertion
+            && assertion.FalseFailure.Lower > limits.Risk
             ? Report(
                 reading,
                 assertion.TrialsNeeded(limits.Risk),

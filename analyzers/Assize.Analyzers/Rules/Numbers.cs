@@ -38,6 +38,7 @@ static class Numbers
             return ((long)whole).ToString("N0", CultureInfo.InvariantCulture);
         double exponent = Math.Floor(Math.Log10(whole));
         double digits = round(whole / Math.Pow(10, exponent - 2));
-        return ((long)digits).ToString(CultureInfo.InvariantCulture) + "e" + (exponent - 2).ToString(CultureInfo.InvariantCulture);
+        return ((long)digits).ToString(CultureInfo.InvariantCulture) + "e" + (exponent - 2).ToString(
+            CultureInfo.InvariantCulture);
     }
 }

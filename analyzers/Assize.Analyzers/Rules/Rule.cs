@@ -15,7 +15,8 @@ abstract class Rule
     public abstract Diagnostic? Judge(Reading reading, Limits limits);
 
     // Release tracking sees a descriptor only through a static field and a helper whose first parameter is called id.
-    protected static DiagnosticDescriptor Describe(string id, DiagnosticSeverity severity, string title, string message) =>
+    protected static DiagnosticDescriptor Describe(
+        string id, DiagnosticSeverity severity, string title, string message) =>
         new(id, title, message, "Trials", severity, isEnabledByDefault: true);
 
     protected Diagnostic Report(Reading reading, long? trials, params object[] arguments) => Diagnostic.Create(

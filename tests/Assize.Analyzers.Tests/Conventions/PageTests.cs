@@ -10,7 +10,8 @@ public class PageTests
     [Fact]
     public void Every_rule_has_a_page_and_every_page_a_rule()
     {
-        var pages = Directory.GetFiles(Repository.Path("analyzers", "docs"), "ASZ*.md").Select(path => Path.GetFileNameWithoutExtension(path)!);
+        var pages = Directory.GetFiles(Repository.Path("analyzers", "docs"), "ASZ*.md").Select(
+            path => Path.GetFileNameWithoutExtension(path)!);
         var rules = RandomizedTests.Rules.Select(rule => rule.Descriptor.Id).ToList();
 
         Assert.Equal(4, rules.Count);
@@ -24,11 +25,15 @@ public class PageTests
         foreach (var descriptor in RandomizedTests.Rules.Select(rule => rule.Descriptor))
         {
             string page = Page(descriptor.Id);
-            string fix = new RaiseTrialsFix().FixableDiagnosticIds.Contains(descriptor.Id) ? "Raise the trials" : "none";
-            string expected = $"# {descriptor.Id}: {descriptor.Title}\n\n| | |\n| --- | --- |\n| Id | {descriptor.Id} |\n"
+            string fix = new RaiseTrialsFix().FixableDiagnosticIds.Contains(descriptor.Id) ? "Raise the trials"
+                : "none";
+            string expected =
+                $"# {descriptor.Id}: {descriptor.Title}\n\n| | |\n| --- | --- |\n| Id | {descriptor.Id} |\n"
                 + $"| Severity | {descriptor.DefaultSeverity} |\n| Category | {descriptor.Category} |\n| Fix | {fix} |\n\n## Why\n";
             Assert.StartsWith(expected, page, StringComparison.Ordinal);
-            Assert.Equal(Sections, Regex.Matches(page, "^## (.+)$", RegexOptions.Multiline).Select(found => found.Groups[1].Value));
+            Assert.Equal(
+                Sections, Regex.Matches(page, "^## (.+)$", RegexOptions.Multiline)
+                .Select(found => found.Groups[1].Value));
             compared++;
         }
 
@@ -56,12 +61,14 @@ public class PageTests
 
     static IEnumerable<(string Section, string Example, Dictionary<string, string> Settings)> Examples(string page)
     {
-        var settings = Regex.Matches(page, @"With `(assize\.\w+) = ([^`]+)`").ToDictionary(found => found.Groups[1].Value, found => found.Groups[2].Value);
+        var settings = Regex.Matches(page, @"With `(assize\.\w+) = ([^`]+)`").ToDictionary(
+            found => found.Groups[1].Value, found => found.Groups[2].Value);
         foreach (string section in Sections)
         {
             string text = page[page.IndexOf($"## {section}\n", StringComparison.Ordinal)..];
             int end = text.IndexOf("\n## ", StringComparison.Ordinal);
-            foreach (Match block in Regex.Matches(end < 0 ? text : text[..end], "```csharp\n(.*?)```", RegexOptions.Singleline))
+            foreach (Match block in Regex.Matches(
+                end < 0 ? text : text[..end], "```csharp\n(.*?)```", RegexOptions.Singleline))
                 yield return (section, block.Groups[1].Value, settings);
         }
     }

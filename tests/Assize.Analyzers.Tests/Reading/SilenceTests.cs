@@ -9,13 +9,18 @@ public class SilenceTests
     const string Tail = "Assert.InRange(ripe / 100.0, 0.4, 0.6);";
 
     [Theory]
-    [InlineData("for (int i = 0; i < own.Next(50, 100); i++) if (picker.IsRipe()) ripe++;")]             // bound not constant
+    // Bound not constant.
+    [InlineData("for (int i = 0; i < own.Next(50, 100); i++) if (picker.IsRipe()) ripe++;")]
     [InlineData("for (int i = 0; i < 100; i++) { if (picker.IsRipe()) ripe++; if (ripe > 50) break; }")]  // stops early
     [InlineData("for (int i = 0; i < 100; i++) { if (picker.IsRipe()) ripe++; if (i == 10) i += 5; }")]   // index moved
-    [InlineData("for (int i = 0; i < 100; i++) { if (picker.IsRipe()) ripe++; if (i == 10) ripe = 0; }")] // counter reset
-    [InlineData("for (int i = 0; i < 100; i++) if (picker.IsRipe() && i > 3) ripe++;")]                   // depends on the pass
-    [InlineData("for (int i = 0; i < 100; i++) if (picker.IsRipe(i)) ripe++;")]                           // another draw in every pass
-    [InlineData("bool once = picker.IsRipe(); for (int i = 0; i < 100; i++) if (once) ripe++;")]          // one draw for all
+    // Counter reset.
+    [InlineData("for (int i = 0; i < 100; i++) { if (picker.IsRipe()) ripe++; if (i == 10) ripe = 0; }")]
+    // Depends on the pass.
+    [InlineData("for (int i = 0; i < 100; i++) if (picker.IsRipe() && i > 3) ripe++;")]
+    // Another draw in every pass.
+    [InlineData("for (int i = 0; i < 100; i++) if (picker.IsRipe(i)) ripe++;")]
+    // One draw for all.
+    [InlineData("bool once = picker.IsRipe(); for (int i = 0; i < 100; i++) if (once) ripe++;")]
     [InlineData("for (int j = 0; j < 10; j++) { bool row = picker.IsRipe(); for (int i = 0; i < 10; i++) if (row) ripe++; }")]
     [InlineData("for (int i = 0; i < 100; i++) if (i % 2 == 0) ripe++;")]                                 // no draw
     [InlineData("int last = 0; for (int i = 0; i < 100; i++) { int w = picker.Weight(); if (w > last) ripe++; last = w; }")]
@@ -57,7 +62,9 @@ public class SilenceTests
     [InlineData("[Theory, MemberData(nameof(own))]")]
     public async Task An_attribute_that_is_not_followed_is_silent(string attribute)
     {
-        string source = Verify.InTest($"{Head}\nfor (int i = 0; i < n; i++) if (picker.IsRipe()) ripe++;\nAssert.InRange(ripe, 40, 60);", attribute, "int n = 100")
+        string source = Verify.InTest(
+            $"{Head}\nfor (int i = 0; i < n; i++) if (picker.IsRipe()) ripe++;\nAssert.InRange(ripe, 40, 60);",
+            attribute, "int n = 100")
             + "\nclass RetryFactAttribute : FactAttribute;";
         Assert.Empty(await Workbench.Analyze(Workbench.Compile(source)));
     }

@@ -3,7 +3,8 @@ namespace Assize.Analyzers.Tests;
 /// <summary>One count, 100 trials at rate 1/2 with 40 to 60 passing, in every way people write it.</summary>
 public class SpellingTests
 {
-    const string Count = "var picker = new Picker(); int ripe = 0; for (int i = 0; i < 100; i++) if (picker.IsRipe()) ripe++;";
+    const string Count =
+        "var picker = new Picker(); int ripe = 0; for (int i = 0; i < 100; i++) if (picker.IsRipe()) ripe++;";
 
     [Theory]
     [InlineData("int ripe = 0; for (int i = 0; i < 100; i++) if (picker.IsRipe()) ripe++;")]
@@ -31,7 +32,8 @@ public class SpellingTests
     [InlineData("long ripe = 0; for (long i = 0; i < 100L; i++) ripe += picker.IsRipe() ? 1 : 0;")]
     [InlineData("int ripe = 0; for (int i = 0; i < 100; i++) { Assert.InRange(picker.Weight(), 90, 110); if (picker.IsRipe()) ripe++; }")]
     public void Reads_every_way_to_count(string counting) =>
-        Holds(Verify.Reading($"var picker = new Picker();\n{counting}\nAssert.InRange(ripe / 100.0, 0.395, 0.605);"), 40, 60, 0.5);
+        Holds(Verify.Reading($"var picker = new Picker();\n{counting}\nAssert.InRange(ripe / 100.0, 0.395, 0.605);"),
+            40, 60, 0.5);
 
     [Theory]
     [InlineData("Assert.InRange(ripe, 40, 60);")]
@@ -96,10 +98,14 @@ public class SpellingTests
     {
         Func<int, bool> passes = asserting switch
         {
-            _ when asserting.Contains("Abs", StringComparison.Ordinal) => successes => Math.Abs(successes / 100.0 - .1) <= .02,
-            _ when asserting.Contains("InRange", StringComparison.Ordinal) => successes => successes / 100.0 >= .1 - .02 && successes / 100.0 <= .1 + .02,
-            _ when asserting.Contains("Equal", StringComparison.Ordinal) => successes => Math.Abs(.3 - successes / 100.0) <= .07,
-            _ when asserting.Contains("100f", StringComparison.Ordinal) => successes => successes / 100f > .1f && successes / 100f < .3f,
+            _ when asserting.Contains("Abs", StringComparison.Ordinal) => successes =>
+                Math.Abs(successes / 100.0 - .1) <= .02,
+            _ when asserting.Contains("InRange", StringComparison.Ordinal) => successes =>
+                successes / 100.0 >= .1 - .02 && successes / 100.0 <= .1 + .02,
+            _ when asserting.Contains("Equal", StringComparison.Ordinal) => successes =>
+                Math.Abs(.3 - successes / 100.0) <= .07,
+            _ when asserting.Contains("100f", StringComparison.Ordinal) => successes => successes / 100f > .1f
+                && successes / 100f < .3f,
             _ => successes => successes / 100m > .1m && successes / 100m < .3m,
         };
         var passing = Enumerable.Range(0, 101).Where(passes).ToList();
@@ -112,7 +118,8 @@ public class SpellingTests
     [Fact]
     public void A_law_in_sight_goes_before_the_centre_of_the_band()
     {
-        var reading = Verify.Reading("int hits = 0; for (int i = 0; i < 300; i++) if (own.Next(6) == 3) hits++; Assert.InRange(hits, 30, 80);");
+        var reading = Verify.Reading(
+            "int hits = 0; for (int i = 0; i < 300; i++) if (own.Next(6) == 3) hits++; Assert.InRange(hits, 30, 80);");
 
         Assert.True(reading.Rate.IsLaw);
         Assert.Equal(1 / 6.0, reading.Rate.Value);
@@ -122,7 +129,8 @@ public class SpellingTests
     [Fact]
     public void A_one_sided_bound_is_read_where_the_law_is_in_sight()
     {
-        var reading = Verify.Reading("int hits = 0; for (int i = 0; i < 300; i++) if (own.NextDouble() < 0.25) hits++; Assert.True(hits > 60);");
+        var reading = Verify.Reading(
+            "int hits = 0; for (int i = 0; i < 300; i++) if (own.NextDouble() < 0.25) hits++; Assert.True(hits > 60);");
 
         AssertEncloses(reading, ExactBinomial.Outside(300, 61, 300, 1, 4));
     }
@@ -155,7 +163,8 @@ public class SpellingTests
     {
         Assert.Equal((low, high), ((int)reading.AcceptLow, (int)reading.AcceptHigh));
         Assert.Equal(rate, reading.Rate.Value, 1e-12);
-        AssertEncloses(reading, ExactBinomial.Outside((int)reading.Trials, low, high, (int)Math.Round(rate * 100), 100));
+        AssertEncloses(
+            reading, ExactBinomial.Outside((int)reading.Trials, low, high, (int)Math.Round(rate * 100), 100));
     }
 
     static void AssertEncloses(AssertionReading reading, double truth)

@@ -5,7 +5,8 @@ namespace Assize.Analyzers.Tests;
 /// <summary>The numbers in the sentences, against whole-number arithmetic that shares nothing with the core.</summary>
 public class MessageTests
 {
-    const string Count = "var picker = new Picker(); int ripe = 0; for (int i = 0; i < 100; i++) if (picker.IsRipe()) ripe++;";
+    const string Count =
+        "var picker = new Picker(); int ripe = 0; for (int i = 0; i < 100; i++) if (picker.IsRipe()) ripe++;";
 
     [Fact]
     public async Task A_flaky_assertion_is_described_in_numbers()
@@ -23,12 +24,16 @@ public class MessageTests
     public async Task The_trials_it_asks_for_are_enough_at_each_of_the_next_numbers()
     {
         string message = await Verify.Message("ASZ2001", Count + "Assert.InRange(ripe / 100.0, 0.4, 0.6);");
-        int needed = int.Parse(message.Split("; ")[1].Split(' ')[0], NumberStyles.AllowThousands, CultureInfo.InvariantCulture);
+        int needed = int.Parse(
+            message.Split("; ")[1].Split(' ')[0], NumberStyles.AllowThousands, CultureInfo.InvariantCulture);
 
-        Assert.Contains(" trials with the same band of rates bring it to 1 in 1,000,000 or less", message, StringComparison.Ordinal);
+        Assert.Contains(
+            " trials with the same band of rates bring it to 1 in 1,000,000 or less", message,
+            StringComparison.Ordinal);
         Assert.All(Enumerable.Range(needed, 12), trials => Assert.True(Red(trials) <= 1e-6));
         Assert.Contains(Enumerable.Range(needed - 12, 12), trials => Red(trials) > 1e-6);
-        static double Red(int trials) => ExactBinomial.Outside(trials, (int)Math.Ceiling(trials * 0.4), (int)Math.Floor(trials * 0.6), 1, 2);
+        static double Red(int trials) =>
+            ExactBinomial.Outside(trials, (int)Math.Ceiling(trials * 0.4), (int)Math.Floor(trials * 0.6), 1, 2);
     }
 
     [Fact]
@@ -39,7 +44,8 @@ public class MessageTests
         int tenThousandths = (int)Math.Round(double.Parse(rate, CultureInfo.InvariantCulture) * 10_000);
 
         Assert.True(ExactBinomial.Outside(100, 40, 60, tenThousandths, 10_000) >= 0.999);
-        Assert.True(ExactBinomial.Outside(100, 40, 60, tenThousandths + Math.Sign(5000 - tenThousandths) * 3, 10_000) < 0.999);
+        Assert.True(ExactBinomial.Outside(
+            100, 40, 60, tenThousandths + Math.Sign(5000 - tenThousandths) * 3, 10_000) < 0.999);
     }
 
     [Fact]
@@ -52,7 +58,9 @@ public class MessageTests
 
         Assert.Contains("bring it to 1 in 100 or less", message, StringComparison.Ordinal);
         Assert.EndsWith("with probability 0.5", message, StringComparison.Ordinal);
-        await Verify.Rule("ASZ2001", Count + "Assert.InRange(ripe, 40, 60);", new Dictionary<string, string> { ["assize.risk_limit"] = "0.04" });
+        await Verify.Rule(
+            "ASZ2001", Count + "Assert.InRange(ripe, 40, 60);", new Dictionary<string,
+            string> { ["assize.risk_limit"] = "0.04" });
     }
 
     [Theory]
@@ -62,7 +70,8 @@ public class MessageTests
     [InlineData("-1")]
     [InlineData("often")]
     public Task A_limit_that_is_none_leaves_the_default(string limit) => Verify.Rule(
-        "ASZ2001", Count + "[|Assert.InRange(ripe, 40, 60)|];", new Dictionary<string, string> { ["assize.risk_limit"] = limit });
+        "ASZ2001", Count + "[|Assert.InRange(ripe, 40, 60)|];", new Dictionary<string,
+            string> { ["assize.risk_limit"] = limit });
 
     [Fact]
     public async Task Standard_errors_are_told_that_trials_do_not_help()
@@ -70,7 +79,8 @@ public class MessageTests
         string message = await Verify.Message(
             "ASZ2001", Count + "double sd = Math.Sqrt(100 * .5 * .5); Assert.True(Math.Abs(ripe - 50) < 3 * sd);");
 
-        Assert.Contains("its band is made of standard errors, so more trials do not help", message, StringComparison.Ordinal);
+        Assert.Contains(
+            "its band is made of standard errors, so more trials do not help", message, StringComparison.Ordinal);
     }
 
     [Fact]
@@ -86,10 +96,12 @@ public class MessageTests
     [Fact]
     public async Task An_impossible_claim_carries_the_text_of_its_refusal()
     {
-        string refusal = Assert.Throws<Assize.Bounds.ClaimRefusedException>(() => Assize.Claim.Rate(1.5, tolerance: 0.1)).Message;
+        string refusal = Assert.Throws<Assize.Bounds.ClaimRefusedException>(
+            () => Assize.Claim.Rate(1.5, tolerance: 0.1)).Message;
 
         Assert.Equal(
-            "This claim will be refused: " + refusal.TrimEnd('.'), await Verify.Message("ASZ1002", "var claim = Claim.Rate(1.5, tolerance: 0.1);"));
+            "This claim will be refused: " + refusal.TrimEnd('.'),
+                await Verify.Message("ASZ1002", "var claim = Claim.Rate(1.5, tolerance: 0.1);"));
     }
 
     [Theory]

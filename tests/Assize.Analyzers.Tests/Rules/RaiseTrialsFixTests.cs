@@ -20,7 +20,8 @@ public class RaiseTrialsFixTests
     [InlineData("int n = 1_0_0;", "int n = {0};")]
     [InlineData("var n = 100L;", "var n = {0}L;")]
     public Task Raises_the_one_constant_and_keeps_what_is_around_it(string before, string after) =>
-        Verify.Fix("ASZ2001", With(before), With(string.Format(System.Globalization.CultureInfo.InvariantCulture, after, Needed)));
+        Verify.Fix("ASZ2001", With(before),
+            With(string.Format(System.Globalization.CultureInfo.InvariantCulture, after, Needed)));
 
     [Fact]
     public Task Raises_the_trials_of_a_claim()
@@ -47,7 +48,8 @@ public class RaiseTrialsFixTests
     [Fact]
     public Task Is_not_offered_where_the_band_is_made_of_standard_errors() => Verify.NoFix(
         "ASZ2001",
-        With("const int n = 100;").Replace("0.4, 0.6", "0.5 - 2 * Math.Sqrt(.25 / n), 0.5 + 2 * Math.Sqrt(.25 / n)", StringComparison.Ordinal));
+        With("const int n = 100;").Replace(
+            "0.4, 0.6", "0.5 - 2 * Math.Sqrt(.25 / n), 0.5 + 2 * Math.Sqrt(.25 / n)", StringComparison.Ordinal));
 
     [Theory]
     [InlineData(FixAllScope.Document, 3)]

@@ -14,8 +14,10 @@ static class NUnitConstraints
         switch (Bare(constraint))
         {
             case IBinaryOperation { OperatorKind: BinaryOperatorKind.And } joined:
-                return Joined(Read(joined.LeftOperand, actual, evaluator), Read(joined.RightOperand, actual, evaluator));
-            case IPropertyReferenceOperation { Property.Name: "Percent", Instance: IInvocationOperation within } when IsWithin(within):
+                return Joined(
+                    Read(joined.LeftOperand, actual, evaluator), Read(joined.RightOperand, actual, evaluator));
+            case IPropertyReferenceOperation { Property.Name: "Percent",
+                Instance: IInvocationOperation within } when IsWithin(within):
                 return After(within.Instance!, Near(within, actual, evaluator, percent: true), actual, evaluator);
             case IPropertyReferenceOperation { Property.Name: "True" } property:
                 return After(property, evaluator.Read(Bare(actual)), actual, evaluator);
@@ -35,7 +37,8 @@ static class NUnitConstraints
         left = Bare(left);
         right = Bare(right);
         return Common(left, right) is { } kind
-            ? Of(op, kind, Of(Operator.Convert, kind, evaluator.Read(left)), Of(Operator.Convert, kind, evaluator.Read(right)))
+            ? Of(op, kind, Of(Operator.Convert, kind, evaluator.Read(left)),
+                Of(Operator.Convert, kind, evaluator.Read(right)))
             : null;
     }
 
@@ -47,7 +50,8 @@ static class NUnitConstraints
         return operation;
     }
 
-    static bool IsWithin(IInvocationOperation call) => call is { TargetMethod.Name: "Within", Arguments.Length: 1, Instance: IInvocationOperation };
+    static bool IsWithin(IInvocationOperation call) =>
+        call is { TargetMethod.Name: "Within", Arguments.Length: 1, Instance: IInvocationOperation };
 
     static Term? Called(IInvocationOperation call, IOperation actual, Evaluator evaluator)
     {
@@ -58,7 +62,8 @@ static class NUnitConstraints
                 Compared(Operator.GreaterOrEqual, actual, Argument(0), evaluator),
                 Compared(Operator.LessOrEqual, actual, Argument(1), evaluator)),
             ("GreaterThan", 1) => Compared(Operator.Greater, actual, Argument(0), evaluator),
-            ("GreaterThanOrEqualTo" or "AtLeast", 1) => Compared(Operator.GreaterOrEqual, actual, Argument(0), evaluator),
+            ("GreaterThanOrEqualTo" or "AtLeast", 1) =>
+                Compared(Operator.GreaterOrEqual, actual, Argument(0), evaluator),
             ("LessThan", 1) => Compared(Operator.Less, actual, Argument(0), evaluator),
             ("LessThanOrEqualTo" or "AtMost", 1) => Compared(Operator.LessOrEqual, actual, Argument(0), evaluator),
             _ => null,
@@ -79,8 +84,10 @@ static class NUnitConstraints
             return null;
         Term Converted(IOperation value, NumberKind to) => Of(Operator.Convert, to, evaluator.Read(value));
         return percent
-            ? Relative(kind, Converted(expected, kind), Converted(actual, kind), Converted(tolerance, NumberKind.Double))
-            : Of(Operator.LessOrEqual, kind, Distance(kind, Converted(expected, kind), Converted(actual, kind)), Converted(tolerance, kind));
+            ? Relative(kind, Converted(expected, kind), Converted(actual, kind),
+                Converted(tolerance, NumberKind.Double))
+            : Of(Operator.LessOrEqual, kind, Distance(kind, Converted(expected, kind), Converted(actual, kind)),
+                Converted(tolerance, kind));
     }
 
     // |(expected − actual) / expected| ≤ percent / 100, the difference taken in the type of the values.
@@ -93,7 +100,8 @@ static class NUnitConstraints
         return Of(
             Operator.LessOrEqual,
             NumberKind.Double,
-            Of(Operator.Absolute, NumberKind.Double, Of(Operator.Divide, NumberKind.Double, difference, AsDouble(expected))),
+            Of(Operator.Absolute, NumberKind.Double,
+                Of(Operator.Divide, NumberKind.Double, difference, AsDouble(expected))),
             Of(Operator.Divide, NumberKind.Double, percent, new Known(100.0)));
     }
 
@@ -112,7 +120,8 @@ static class NUnitConstraints
         return before switch
         {
             null => condition,
-            IPropertyReferenceOperation { Property.Name: "And", Instance: { } first } => Joined(Read(first, actual, evaluator), condition),
+            IPropertyReferenceOperation { Property.Name: "And", Instance: { } first } =>
+                Joined(Read(first, actual, evaluator), condition),
             _ => null,
         };
     }
@@ -123,7 +132,8 @@ static class NUnitConstraints
     static NumberKind? Common(IOperation a, IOperation b)
     {
         NumberKind left = Arithmetic.KindOf(a.Type), right = Arithmetic.KindOf(b.Type);
-        if (left is NumberKind.Other or NumberKind.Boolean or NumberKind.Decimal || right is NumberKind.Other or NumberKind.Boolean or NumberKind.Decimal)
+        if (left is NumberKind.Other or NumberKind.Boolean or NumberKind.Decimal
+            || right is NumberKind.Other or NumberKind.Boolean or NumberKind.Decimal)
             return null;
         if (left is NumberKind.Single or NumberKind.Double || right is NumberKind.Single or NumberKind.Double)
             return NumberKind.Double;

@@ -20,13 +20,15 @@ sealed class NUnitFramework : TestFramework
     public override bool IsFailure(IMethodSymbol method) => method.Name == "Fail" && IsAssertion(method);
 
     public override DataRow? Row(AttributeData attribute) =>
-        attribute.AttributeClass is { Name: "TestCaseAttribute" } type && IsIn(type, "NUnit.Framework") ? DataRow.Of(attribute) : null;
+        attribute.AttributeClass is { Name: "TestCaseAttribute" } type && IsIn(type, "NUnit.Framework")
+            ? DataRow.Of(attribute) : null;
 
     public override Runs? RunsOf(AttributeData attribute)
     {
         if (attribute.AttributeClass is not { } type || !IsIn(type, "NUnit.Framework"))
             return base.RunsOf(attribute);
-        int? count = attribute.ConstructorArguments.Length == 1 ? attribute.ConstructorArguments[0].Value as int? : null;
+        int? count = attribute.ConstructorArguments.Length == 1 ? attribute.ConstructorArguments[0].Value as int?
+            : null;
         return type.Name switch
         {
             "RetryAttribute" => count is >= 1 ? new Runs(1, count.Value) : null,
@@ -37,7 +39,8 @@ sealed class NUnitFramework : TestFramework
 
     public override Requirement? Read(IInvocationOperation call, Evaluator evaluator)
     {
-        var arguments = call.Arguments.OrderBy(argument => argument.Parameter?.Ordinal).Select(argument => argument.Value).ToList();
+        var arguments = call.Arguments.OrderBy(argument => argument.Parameter?.Ordinal).Select(
+            argument => argument.Value).ToList();
         Term? condition = call.TargetMethod.Name switch
         {
             "True" or "IsTrue" => evaluator.Read(arguments[0]),
@@ -48,14 +51,16 @@ sealed class NUnitFramework : TestFramework
             "Less" => Compared(Operator.Less, evaluator, arguments),
             "LessOrEqual" => Compared(Operator.LessOrEqual, evaluator, arguments),
             "AreEqual" when HasDelta(call.TargetMethod) => Within(
-                NumberKind.Double, evaluator.Read(arguments[0]), evaluator.Read(arguments[1]), evaluator.Read(arguments[2])),
+                NumberKind.Double, evaluator.Read(arguments[0]), evaluator.Read(arguments[1]),
+                    evaluator.Read(arguments[2])),
             _ => null,
         };
         return condition is null ? null : Demand(condition, call);
     }
 
     static bool HasDelta(IMethodSymbol method) =>
-        method.Parameters.Length >= 3 && method.Parameters.Take(3).All(parameter => parameter.Type.SpecialType == SpecialType.System_Double);
+        method.Parameters.Length >= 3 && method.Parameters.Take(3)
+            .All(parameter => parameter.Type.SpecialType == SpecialType.System_Double);
 
     static Term? That(IInvocationOperation call, Evaluator evaluator, List<IOperation> arguments)
     {
