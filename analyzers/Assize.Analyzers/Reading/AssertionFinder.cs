@@ -18,7 +18,7 @@ sealed class AssertionFinder
 
     public Requirement? Read(IInvocationOperation call)
     {
-        if (call.IsInsideFunction() || !_framework.IsAssertion(call.TargetMethod))
+        if (call.IsInsideFunction())
             return null;
         return _framework.IsFailure(call.TargetMethod)
             ? Guarded(call)

@@ -49,7 +49,6 @@ sealed record AssertionReading(Location Location, Location? TrialsLiteral) : Rea
     /// The nearest wrong rate that one evaluation catches with this confidence; null when there is none.
     /// </summary>
     public double? RateCaught(double confidence) =>
-        Question.Ask(
-            () => ProportionAssessment.SmallestDefectCaught(
-            Trials, AcceptLow, AcceptHigh, Rate.Value, confidence)) + Rate.Value;
+        Rate.Value + Question.Ask(() =>
+            ProportionAssessment.SmallestDefectCaught(Trials, AcceptLow, AcceptHigh, Rate.Value, confidence));
 }

@@ -132,10 +132,8 @@ sealed class ClaimReader
             argument => argument.Parameter?.Ordinal == (term.Instance is null ? 1 : 0))?.Value;
 
     static IOperation? Argument(IInvocationOperation call, string parameter) =>
-        call.Arguments.FirstOrDefault(
-            argument =>
-            argument.Parameter?.Name == parameter)?.Value is { ConstantValue: not { HasValue: true,
-            Value: null } } value
+        call.Arguments.FirstOrDefault(argument => argument.Parameter?.Name == parameter)?.Value is { } value
+        && value.ConstantValue is not { HasValue: true, Value: null }
             ? value
             : null;
 

@@ -50,21 +50,11 @@ sealed class SuiteReader
             CancellationToken cancellation)
     {
         var known = row?.Bind(method) ?? ImmutableDictionary.Create<ISymbol, Term>(SymbolEqualityComparer.Default);
-        var requirements = new List<Requirement>();
-        foreach (IOperation operation in body.Descendants())
-        {
-            var evaluator = new Evaluator(writes, known, cancellation);
-            var finder = new AssertionFinder(framework, evaluator, writes);
-            Requirement? requirement = operation switch
-            {
-                IInvocationOperation call => finder.Read(call),
-                IThrowOperation thrown => finder.Guarded(thrown),
-                _ => null,
-            };
-            if (requirement is { Condition: not (Term.Unknown or Term.Known) })
-                requirements.Add(requirement with { TookRoot = evaluator.TookRoot });
-        }
-
+        var requirements = body.Descendants()
+            .Where(operation => IsCandidate(operation, framework))
+            .Select(operation => Demand(operation, framework, writes, known, cancellation))
+            .OfType<Requirement>()
+            .ToList();
         var subject = new Subject(writes, _types, new Evaluator(writes, known, cancellation), row, runs);
         foreach (Requirement requirement in Pairing.Of(requirements))
         {
@@ -72,5 +62,23 @@ sealed class SuiteReader
             if (subject.Read(requirement) is { } reading)
                 yield return reading;
         }
+    }
+
+    static bool IsCandidate(IOperation operation, TestFramework framework) =>
+        operation is IThrowOperation || (operation is IInvocationOperation call && framework.IsAssertion(call.TargetMethod));
+
+    static Requirement? Demand(
+        IOperation operation,
+        TestFramework framework,
+        Writes writes,
+        ImmutableDictionary<ISymbol, Term> known,
+        CancellationToken cancellation)
+    {
+        var evaluator = new Evaluator(writes, known, cancellation);
+        var finder = new AssertionFinder(framework, evaluator, writes);
+        Requirement? requirement = operation is IInvocationOperation call ? finder.Read(call) : finder.Guarded(operation);
+        return requirement is { Condition: not (Term.Unknown or Term.Known) }
+            ? requirement with { TookRoot = evaluator.TookRoot }
+            : null;
     }
 }

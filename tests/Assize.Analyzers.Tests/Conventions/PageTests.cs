@@ -41,6 +41,17 @@ public class PageTests
     }
 
     [Fact]
+    public void The_release_notes_list_every_rule()
+    {
+        string notes = Repository.Read("analyzers", "Assize.Analyzers", "AnalyzerReleases.Unshipped.md")
+            + Repository.Read("analyzers", "Assize.Analyzers", "AnalyzerReleases.Shipped.md");
+        var rows = RandomizedTests.Rules.Select(rule =>
+            $"{rule.Descriptor.Id} | {rule.Descriptor.Category} | {rule.Descriptor.DefaultSeverity} | {rule.GetType().Name}\n");
+
+        Assert.All(rows, row => Assert.Contains(row, notes, StringComparison.Ordinal));
+    }
+
+    [Fact]
     public async Task Examples_do_what_the_page_says()
     {
         int run = 0;

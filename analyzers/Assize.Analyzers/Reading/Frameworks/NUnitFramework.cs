@@ -39,8 +39,10 @@ sealed class NUnitFramework : TestFramework
 
     public override Requirement? Read(IInvocationOperation call, Evaluator evaluator)
     {
-        var arguments = call.Arguments.OrderBy(argument => argument.Parameter?.Ordinal).Select(
-            argument => argument.Value).ToList();
+        var arguments = call.Arguments
+            .OrderBy(argument => argument.Parameter?.Ordinal)
+            .Select(argument => argument.Value)
+            .ToList();
         Term? condition = call.TargetMethod.Name switch
         {
             "True" or "IsTrue" => evaluator.Read(arguments[0]),

@@ -23,8 +23,10 @@ sealed class XunitFramework : TestFramework
 
     public override Requirement? Read(IInvocationOperation call, Evaluator evaluator)
     {
-        var arguments = call.Arguments.OrderBy(argument => argument.Parameter?.Ordinal).Select(
-            argument => argument.Value).ToList();
+        var arguments = call.Arguments
+            .OrderBy(argument => argument.Parameter?.Ordinal)
+            .Select(argument => argument.Value)
+            .ToList();
         return call.TargetMethod.Name switch
         {
             "True" => Demand(evaluator.Read(arguments[0]), call),
