@@ -1,4 +1,5 @@
 using System.CommandLine;
+using System.CommandLine.Help;
 using Assize.Bounds;
 
 namespace Assize.Cli;
@@ -6,6 +7,8 @@ namespace Assize.Cli;
 /// <summary>Builds the tree of commands from the pages in this assembly and runs one line.</summary>
 static class CommandLine
 {
+    const string Name = "assize";
+
     public static async Task<int> InvokeAsync(string[] arguments, Desk desk, CancellationToken token = default)
     {
         var result = Tree(desk).Parse(arguments);
@@ -13,7 +16,7 @@ static class CommandLine
         {
             foreach (var error in result.Errors)
                 await desk.Errors.WriteLineAsync(error.Message);
-            await desk.Errors.WriteLineAsync($"See: assize {Words(result.CommandResult.Command)}--help");
+            await desk.Errors.WriteLineAsync($"See: {Words(result.CommandResult.Command)}--help");
             return (int)ExitCode.CouldNotRun;
         }
 
@@ -29,9 +32,14 @@ static class CommandLine
         }
     }
 
-    public static RootCommand Tree(Desk desk)
+    public static Command Tree(Desk desk)
     {
-        var root = new RootCommand("Plans claims about random code, runs test suites and holds them to a false-failure budget.");
+        // A root command would take the name of whatever file started it.
+        var root = new Command(Name, "Plans claims about random code, runs test suites and holds them to a false-failure budget.")
+        {
+            new HelpOption { Recursive = true },
+            new VersionOption(),
+        };
         foreach (var page in Pages().OrderBy(page => page.Words, StringComparer.Ordinal))
             Group(root, page.Words.Split(' ')[..^1]).Subcommands.Add(page.Define(desk));
         return root;
@@ -46,6 +54,5 @@ static class CommandLine
     static Command Group(Command root, string[] words) =>
         words.Aggregate(root, (parent, word) => parent.Subcommands.Single(command => command.Name == word));
 
-    static string Words(Command command) =>
-        command is RootCommand ? "" : string.Concat(command.Parents.OfType<Command>().Select(Words)) + command.Name + " ";
+    static string Words(Command command) => string.Concat(command.Parents.OfType<Command>().Select(Words)) + command.Name + " ";
 }

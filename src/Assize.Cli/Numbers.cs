@@ -20,6 +20,9 @@ static class Numbers
 
     public static string Text(long value) => value.ToString("#,0", CultureInfo.InvariantCulture);
 
+    public static string Ratio(double value) =>
+        value.ToString(value < 100 ? "0.00" : "#,0", CultureInfo.InvariantCulture);
+
     /// <summary>A probability that must not look smaller than it is: three digits, rounded up.</summary>
     public static string AtMost(double probability)
     {

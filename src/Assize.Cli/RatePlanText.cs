@@ -45,13 +45,13 @@ static class RatePlanText
     {
         var table = new Table().Border(TableBorder.Simple)
             .AddColumn("Theorem").AddColumn("Trials", column => column.RightAligned())
-            .AddColumn("Of the plan", column => column.RightAligned()).AddColumn("Assumes");
+            .AddColumn("Ratio", column => column.RightAligned()).AddColumn("Assumes");
         foreach (var theorem in plan.Alternatives)
         {
             table.AddRow(
                 theorem.Name,
                 theorem.Trials is { } trials ? Numbers.Text(trials) : "none",
-                theorem.Trials is { } needed ? $"{Math.Ceiling(100.0 * needed / plan.FixedTrials):0} %" : "",
+                theorem.Trials is { } needed ? Numbers.Ratio((double)needed / plan.FixedTrials) : "",
                 theorem.Assumes);
         }
 

@@ -63,7 +63,10 @@ sealed class PlanRatePage : ICommandPage
         var side = least ? atLeast : atMost;
         double rate = line.GetValue(side) ?? Required(line, target);
         double distance = Required(line, defect);
-        return least ? Claim.RateAtLeast(rate, distance) : Claim.RateAtMost(rate, distance);
+        // Below 0 and above 1 there is nothing to catch: the worst that can be is the rim itself.
+        return least
+            ? Claim.RateAtLeast(rate, distance > rate ? rate : distance)
+            : Claim.RateAtMost(rate, distance > 1 - rate ? 1 - rate : distance);
     }
 
     static double Required(ParseResult line, Option<double?> option) => line.GetValue(option) ?? throw Missing(option);

@@ -7,7 +7,7 @@ static class FindingReader
 {
     public static IReadOnlyList<Finding> Read(string folder) =>
     [
-        .. Directory.EnumerateFiles(folder, "*.sarif")
+        .. Directory.EnumerateFiles(folder, "*.sarif", SearchOption.AllDirectories)
             .SelectMany(ReadFile)
             .Where(finding => finding.Rule.StartsWith("ASZ", StringComparison.Ordinal))
             // A project built for two frameworks says everything twice.

@@ -10,10 +10,13 @@ static partial class SuiteBuild
     {
         var lines = new List<string>();
         string home = AppContext.BaseDirectory;
+        // Two projects of one name would write to one file.
+        findings = Directory.CreateDirectory(Path.Combine(findings, Guid.NewGuid().ToString("n"))).FullName;
         int exit = await ChildProcess.RunAsync(ChildProcess.Dotnet(
             Path.GetDirectoryName(project)!,
             "build", project, "-nologo", "-v:quiet", $"-p:Configuration={configuration}",
             $"-p:CustomAfterMicrosoftCommonTargets={Path.Combine(home, "Build", "assize.targets")}",
+            $"-p:AssizeProject={project}",
             $"-p:AssizeFindings={findings}",
             $"-p:AssizeAnalyzers={Path.Combine(home, "analyzers")}",
             $"-p:AssizeRules={string.Join("%3B", Rules())}"), lines.Add, token);

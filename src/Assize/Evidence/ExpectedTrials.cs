@@ -1,7 +1,7 @@
 namespace Assize;
 
 /// <summary>About how many trials a race takes, by what is true. Estimates for people: no verdict rests on them.</summary>
-/// <remarks>Exact for races of up to 20,000 trials; beyond, a walk of coarser steps with the same mean and variance, within 2 %.</remarks>
+/// <remarks>Exact for races of up to 4,000 trials; beyond, a walk of coarser steps with the same mean and variance, within 2 %.</remarks>
 public sealed record ExpectedTrials
 {
     ExpectedTrials(double atTarget, double atTolerance, double atDefect) =>

@@ -9,7 +9,7 @@ namespace Assize;
 /// </remarks>
 sealed class RaceWalk
 {
-    const int Steps = 20_000;
+    const int Steps = 4_000;
     const double Negligible = 1e-9;
 
     readonly RateStakes _stakes;
