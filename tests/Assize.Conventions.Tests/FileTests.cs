@@ -1,3 +1,4 @@
+using Microsoft.CodeAnalysis;
 using Microsoft.CodeAnalysis.CSharp;
 using Microsoft.CodeAnalysis.CSharp.Syntax;
 
@@ -19,7 +20,8 @@ public class FileTests
     // A second type may stand in the file only as a part of something larger: the factory of a law or of a claim.
     static bool IsNamedAfterItsType(string file)
     {
-        string name = Path.GetFileNameWithoutExtension(file);
+        // Claim{TDraw}.cs holds the generic Claim.
+        string name = Path.GetFileNameWithoutExtension(file).Split('{')[0];
         var root = CSharpSyntaxTree.ParseText(File.ReadAllText(file)).GetCompilationUnitRoot();
         var types = root.DescendantNodes(node => node is CompilationUnitSyntax or BaseNamespaceDeclarationSyntax)
             .OfType<MemberDeclarationSyntax>()
@@ -29,7 +31,7 @@ public class FileTests
             return root.Members.Any(member => member is GlobalStatementSyntax) || root.AttributeLists.Count > 0;
 
         return types.Any(type => Name(type) == name)
-            && types.All(type => Name(type) == name || type.Modifiers.Any(SyntaxKind.PartialKeyword) || type.Modifiers.Any(SyntaxKind.FileKeyword));
+            && types.All(type => Name(type) == name || type.Modifiers.Any(modifier => modifier.IsKind(SyntaxKind.PartialKeyword) || modifier.IsKind(SyntaxKind.FileKeyword)));
     }
 
     static string Name(MemberDeclarationSyntax member) => member switch

@@ -1,4 +1,3 @@
-using System.Reflection;
 using System.Reflection.Metadata;
 using System.Reflection.PortableExecutable;
 
@@ -10,7 +9,7 @@ public class ReferenceTests
     [Theory]
     [InlineData("Assize.Bounds")]
     [InlineData("Assize", "Assize.Bounds")]
-    [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "System.CommandLine", "Spectre.Console")]
+    [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "System.CommandLine", "Spectre.Console", "Spectre.Console.Ansi")]
     [InlineData("Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis", "Microsoft.CodeAnalysis.CSharp")]
     [InlineData("Assize.Analyzers.Fixes", "Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis",
         "Microsoft.CodeAnalysis.CSharp", "Microsoft.CodeAnalysis.Workspaces", "Microsoft.CodeAnalysis.CSharp.Workspaces")]

@@ -37,6 +37,20 @@ static class ChildProcess
     }
 
     /// <summary>The `dotnet` that runs this tool, so that no other SDK is picked up by chance.</summary>
-    public static ProcessStartInfo Dotnet(string folder, params IEnumerable<string> arguments) =>
-        new(Environment.GetEnvironmentVariable("DOTNET_HOST_PATH") ?? "dotnet", arguments) { WorkingDirectory = folder };
+    public static ProcessStartInfo Dotnet(string folder, params IEnumerable<string> arguments)
+    {
+        var start = new ProcessStartInfo(Environment.GetEnvironmentVariable("DOTNET_HOST_PATH") ?? "dotnet", arguments)
+        {
+            WorkingDirectory = folder,
+        };
+        foreach (string name in start.Environment.Keys.Where(IsOfAnotherHost).ToList())
+            start.Environment.Remove(name);
+        return start;
+    }
+
+    // Called from a build or a test run, this tool must not pass on what steers that one.
+    static bool IsOfAnotherHost(string name) =>
+        name.StartsWith("MSBuild", StringComparison.OrdinalIgnoreCase)
+        || name.StartsWith("TESTINGPLATFORM", StringComparison.OrdinalIgnoreCase)
+        || name is "DOTNET_CLI_TEST_COMMAND_WORKING_DIRECTORY";
 }
