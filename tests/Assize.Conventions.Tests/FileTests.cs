@@ -10,8 +10,8 @@ public class FileTests
     [Fact]
     public void A_file_holds_the_type_it_is_named_after()
     {
-        var sources = Repository.Sources("src", "analyzers", "tests", "samples");
-        var misnamed = sources.Where(file => !IsNamedAfterItsType(file)).Select(file => Path.GetRelativePath(Repository.Root, file));
+        var sources = Sources.Below("src", "analyzers", "tests", "samples");
+        var misnamed = sources.Where(file => !IsNamedAfterItsType(file)).Select(file => Path.GetRelativePath(Testing.Repository.Root, file));
 
         Assert.Empty(misnamed);
         Assert.True(sources.Count > 40, $"only {sources.Count} files seen");

@@ -8,8 +8,8 @@ public partial class ReadmeTests
     [Fact]
     public void Every_block_of_code_stands_in_the_samples()
     {
-        var samples = Repository.Sources("samples").Select(file => Flat(File.ReadAllText(file))).ToArray();
-        var blocks = CodeBlock().Matches(Repository.Read("README.md")).Select(match => Flat(match.Groups[1].Value)).ToArray();
+        var samples = Sources.Below("samples").Select(file => Flat(File.ReadAllText(file))).ToArray();
+        var blocks = CodeBlock().Matches(Testing.Repository.Read("README.md")).Select(match => Flat(match.Groups[1].Value)).ToArray();
 
         Assert.NotEmpty(blocks);
         Assert.All(blocks, block => Assert.Contains(samples, sample => sample.Contains(block, StringComparison.Ordinal)));
@@ -20,8 +20,8 @@ public partial class ReadmeTests
     {
         const string command = "dotnet test Kit.sln";
 
-        Assert.Contains(command + "\n", Repository.Read("README.md"), StringComparison.Ordinal);
-        Assert.Contains(command + " ", Repository.Read(".ci/run"), StringComparison.Ordinal);
+        Assert.Contains(command + "\n", Testing.Repository.Read("README.md"), StringComparison.Ordinal);
+        Assert.Contains(command + " ", Testing.Repository.Read(".ci/run"), StringComparison.Ordinal);
     }
 
     // Indentation and line breaks are the page's own.
