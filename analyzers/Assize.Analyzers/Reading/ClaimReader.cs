@@ -10,9 +10,6 @@ namespace Assize.Analyzers;
 /// </summary>
 sealed class ClaimReader
 {
-    const double UsualRisk = 1e-9;
-    const double UsualConfidence = 0.999;
-
     readonly INamedTypeSymbol _claim;
     readonly INamedTypeSymbol? _terms;
 
@@ -37,7 +34,7 @@ sealed class ClaimReader
         double? Number(IOperation? value) =>
             value is not null && evaluator.Read(value) is Term.Known known ? Arithmetic.Number(known.Value) : null;
 
-        double risk = UsualRisk, confidence = UsualConfidence;
+        double risk = UsualTerms.Risk, confidence = UsualTerms.Confidence;
         IInvocationOperation? trialsCall = null;
         foreach (IInvocationOperation term in Terms(made))
         {

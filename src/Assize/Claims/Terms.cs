@@ -1,11 +1,13 @@
+using Assize.Bounds;
+
 namespace Assize;
 
 /// <summary>How a claim is to be judged, whatever it claims.</summary>
 sealed record Terms
 {
-    public double Risk { get; init; } = 1e-9;
+    public double Risk { get; init; } = UsualTerms.Risk;
 
-    public double Confidence { get; init; } = 0.999;
+    public double Confidence { get; init; } = UsualTerms.Confidence;
 
     public long? Trials { get; init; }
 
