@@ -1,3 +1,5 @@
+using System.Numerics;
+
 namespace Assize.Bounds;
 
 public abstract partial class Law
@@ -13,8 +15,15 @@ public abstract partial class Law
     }
 }
 
-sealed class Bernoulli(double rate, double other) : Law
+sealed class Bernoulli(double rate, double other) : Law, ILattice
 {
+    double ILattice.Start => 0;
+
+    double? ILattice.Step => 1;
+
+    Complex ILattice.LogCharacteristic(double angle, double step) => Characteristic.LogOnePlus(
+        rate * Characteristic.Turn(angle / step * other) + other * Characteristic.Turn(-angle / step * rate));
+
     public override double Mean => rate;
 
     public override double Variance => rate * other;
@@ -33,6 +42,15 @@ sealed class Bernoulli(double rate, double other) : Law
 
         double moment = other + rate * Elementary.Exp(tilt);
         return moment < 0.5 ? Elementary.Log(moment) : Elementary.LogOnePlus(rate * Elementary.ExpMinusOne(tilt));
+    }
+
+    // E e^(θ(X - p)) - 1 = p·(e^(θq) - 1 - θq) + q·(e^(-θp) - 1 + θp): the linear parts cancel exactly.
+    public override double CentralLogMoment(double tilt)
+    {
+        Check.Finite(tilt, nameof(tilt));
+        return Math.Abs(tilt) > 1
+            ? Math.Max(0, LogMoment(tilt) - tilt * rate)
+            : Elementary.LogOnePlus(rate * Elementary.ExpExcess(tilt * other) + other * Elementary.ExpExcess(-tilt * rate));
     }
 
     // Both rates are carried: one of them may be too near 1 to be told from it.

@@ -33,4 +33,10 @@ public abstract partial class Law
     /// <returns>A law of the same support.</returns>
     /// <exception cref="ArgumentOutOfRangeException">The tilt is infinite or NaN.</exception>
     public abstract Law Tilted(double tilt);
+
+    /// <summary>The cumulant function about the mean, accurate however small the tilt is.</summary>
+    /// <param name="tilt">Any finite number, in reciprocal units of a draw.</param>
+    /// <returns>ln E exp(tilt · (draw - Mean)), in [0, ∞].</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The tilt is infinite or NaN.</exception>
+    public abstract double CentralLogMoment(double tilt);
 }

@@ -48,7 +48,7 @@ readonly struct BinomialPoint
             return -trials * LogRate(rate);
 
         double excess = MeanExcess(trials, successes, rate);
-        return Part(successes, excess, trials * rate) + Part(trials - successes, -excess, trials * (1 - rate));
+        return CountDeviance.Of(successes, excess, trials * rate) + CountDeviance.Of(trials - successes, -excess, trials * (1 - rate));
     }
 
     public double Mass => Math.Min(1, _factor * Elementary.Exp(_exponent));
@@ -82,13 +82,4 @@ readonly struct BinomialPoint
 
     static double Corrections(double trials, double successes, double failures) =>
         StirlingError.Of(trials) - StirlingError.Of(successes) - StirlingError.Of(failures);
-
-    // count · ln(count / mean) + mean - count.
-    static double Part(double count, double meanExcess, double mean)
-    {
-        double relative = meanExcess / count;
-        return relative > -0.5
-            ? count * Elementary.LogShortfall(relative)
-            : count * (relative - Elementary.Log(mean / count));
-    }
 }

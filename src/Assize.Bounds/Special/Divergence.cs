@@ -15,8 +15,12 @@ public static class Divergence
         Check.Probability(observed, nameof(observed));
         Check.Probability(rate, nameof(rate));
         double excess = rate - observed;
-        return Part(observed, excess, rate) + Part(1 - observed, -excess, 1 - rate);
+        return Between(observed, 1 - observed, rate, 1 - rate, -excess);
     }
+
+    /// <summary>The same where both complements and the difference observed - rate are known without cancellation.</summary>
+    internal static double Between(double observed, double otherObserved, double rate, double otherRate, double difference) =>
+        CountDeviance.Of(observed, -difference, rate) + CountDeviance.Of(otherObserved, difference, otherRate);
 
     /// <summary>The greatest rate whose divergence from the observed one stays within a bound.</summary>
     /// <param name="observed">The rate observed, in [0, 1].</param>
@@ -60,7 +64,7 @@ public static class Divergence
 
     // The divergence when one of the two rates has grown, and the other shrunk, by a distance.
     static double Apart(double growing, double shrinking, double distance) =>
-        Part(growing, distance, growing + distance) + Part(shrinking, -distance, shrinking - distance);
+        CountDeviance.Of(growing, distance, growing + distance) + CountDeviance.Of(shrinking, -distance, shrinking - distance);
 
     // Up to half of the shrinking rate: the distance itself, so that a small one keeps its digits.
     static double Distance(double growing, double shrinking, double divergence)
@@ -80,7 +84,7 @@ public static class Divergence
     static double Remainder(double growing, double shrinking, double divergence)
     {
         double At(double v) => shrinking * v
-            + Part(growing, shrinking * -Elementary.ExpMinusOne(-v), growing + shrinking * -Elementary.ExpMinusOne(-v))
+            + CountDeviance.Of(growing, shrinking * -Elementary.ExpMinusOne(-v), growing + shrinking * -Elementary.ExpMinusOne(-v))
             - shrinking * -Elementary.ExpMinusOne(-v) - divergence;
 
         double upper = 2;
@@ -90,19 +94,5 @@ public static class Divergence
         return upper >= 1000 && At(upper) < 0
             ? 0
             : shrinking * Elementary.Exp(-RootBracket.Find(At, 0.5, upper, Precision).Upper);
-    }
-
-    // x ln(x/p) + p - x, where p = x + excess.
-    static double Part(double observed, double excess, double rate)
-    {
-        if (observed == 0)
-            return excess;
-        if (rate == 0)
-            return double.PositiveInfinity;
-
-        double relative = excess / observed;
-        return relative > -0.5
-            ? observed * Elementary.LogShortfall(relative)
-            : observed * (relative - Elementary.Log(rate / observed));
     }
 }

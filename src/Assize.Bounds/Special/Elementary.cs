@@ -102,6 +102,22 @@ public static class Elementary
         return s * (value - 2 * z * series);
     }
 
+    /// <summary>How far the exponential exceeds its tangent at 0, without the cancellation of subtracting it.</summary>
+    /// <param name="value">A number in [-∞, ∞].</param>
+    /// <returns>e^value - 1 - value, in [0, ∞].</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The value is NaN.</exception>
+    public static double ExpExcess(double value)
+    {
+        if (!(value > -0.7 && value < 0.7))
+            return double.IsPositiveInfinity(value) ? value : ExpMinusOne(value) - value;
+
+        // v²/2 + v³/6 + …: 18 terms suffice for |v| ≤ 0.7.
+        double sum = 0;
+        for (int k = 20; k >= 3; k--)
+            sum = (sum + 1) * value / k;
+        return value * value / 2 * (1 + sum);
+    }
+
     // ln(1 + f) = 2 artanh(s), s = f / (2 + f): exact fractions 2/(2j + 1), enough of them for |s| ≤ 0.172.
     static double LogOnePlusFraction(double f, int exponent)
     {

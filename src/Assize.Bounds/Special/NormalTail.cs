@@ -71,6 +71,9 @@ public static class NormalTail
         return probability > 0.2 ? CentralQuantile(0.5 - probability) : FarQuantile(Elementary.Log(probability));
     }
 
+    /// <summary>ln φ(point).</summary>
+    internal static double LogDensity(double point) => -0.5 * point * point - LogRootTwoPi;
+
     static double CentralQuantile(double central)
     {
         double point = central * RootTwoPi;
@@ -82,7 +85,7 @@ public static class NormalTail
                 return point;
         }
 
-        return point;
+        throw new InvalidOperationException($"The normal quantile at {Check.Text(central)} from the middle did not settle.");
     }
 
     static double FarQuantile(double logarithm)
