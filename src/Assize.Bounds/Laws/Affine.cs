@@ -5,16 +5,17 @@ namespace Assize.Bounds;
 public abstract partial class Law
 {
     /// <summary>The law of a draw that is scaled and shifted.</summary>
-    /// <param name="scale">The factor, finite and not 0; may be negative.</param>
-    /// <param name="shift">What is added after scaling; any finite number.</param>
+    /// <param name="scale">The factor, of magnitude in [1e-100, 1e100]; may be negative. The third moment of the image must be finite.</param>
+    /// <param name="shift">What is added after scaling, in [-1e100, 1e100].</param>
     /// <returns>The law of scale · draw + shift.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public Law Image(double scale, double shift)
     {
-        Check.Finite(scale, nameof(scale));
-        Check.Between(Math.Abs(scale), double.Epsilon, double.MaxValue, nameof(scale));
-        Check.Finite(shift, nameof(shift));
-        return new Affine(this, scale, shift);
+        Check.Between(Math.Abs(scale), Least, Greatest, nameof(scale));
+        Check.Between(shift, -Greatest, Greatest, nameof(shift));
+        var image = new Affine(this, scale, shift);
+        Check.Finite(image.ThirdAbsoluteCentralMoment, nameof(scale));
+        return image;
     }
 }
 

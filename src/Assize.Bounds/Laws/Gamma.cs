@@ -4,23 +4,23 @@ public abstract partial class Law
 {
     /// <summary>A gamma draw.</summary>
     /// <param name="shape">The shape, in [1e-3, 1e9].</param>
-    /// <param name="scale">The scale, in (0, 1e150]; unit of the draw. The mean is shape times scale.</param>
+    /// <param name="scale">The scale, in [1e-100, 1e90]; unit of the draw. The mean is shape times scale.</param>
     /// <returns>The gamma law.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Law Gamma(double shape, double scale)
     {
         Check.Between(shape, 1e-3, 1e9, nameof(shape));
-        Check.Between(scale, double.Epsilon, 1e150, nameof(scale));
+        Check.Between(scale, Least, 1e90, nameof(scale));
         return new Gamma(shape, scale);
     }
 
     /// <summary>An exponential draw.</summary>
-    /// <param name="mean">The mean, in (0, 1e150]; unit of the draw.</param>
+    /// <param name="mean">The mean, in [1e-100, 1e90]; unit of the draw.</param>
     /// <returns>The exponential law: gamma of shape 1.</returns>
     /// <exception cref="ArgumentOutOfRangeException">The mean lies outside its domain, or is NaN.</exception>
     public static Law Exponential(double mean)
     {
-        Check.Between(mean, double.Epsilon, 1e150, nameof(mean));
+        Check.Between(mean, Least, 1e90, nameof(mean));
         return new Gamma(1, mean);
     }
 }
@@ -60,7 +60,8 @@ sealed class Gamma(double shape, double scale) : Law
 
     public override Law Tilted(double tilt)
     {
-        Check.Between(tilt * scale, double.MinValue, 1 - 1e-15, nameof(tilt));
+        Check.Finite(tilt, nameof(tilt));
+        Check.Between(tilt, double.MinValue, (1 - 1e-15) / scale, nameof(tilt));
         return new Gamma(shape, scale / (1 - tilt * scale));
     }
 }

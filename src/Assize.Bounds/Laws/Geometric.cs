@@ -62,6 +62,7 @@ sealed class Geometric(double rate, double other) : Law, ILattice
 
     public override Law Tilted(double tilt)
     {
+        Check.Finite(tilt, nameof(tilt));
         double failure = other * Elementary.Exp(tilt);
         Check.Inside(failure, 0, 1, nameof(tilt));
         double success = rate - other * Elementary.ExpMinusOne(tilt);

@@ -3,6 +3,10 @@ namespace Assize.Bounds;
 /// <summary>The distribution of one draw, known completely.</summary>
 public abstract partial class Law
 {
+    // Magnitudes within which a third moment neither overflows nor vanishes.
+    private protected const double Least = 1e-100;
+    private protected const double Greatest = 1e100;
+
     private protected Law()
     {
     }
@@ -29,9 +33,9 @@ public abstract partial class Law
     public abstract double LogMoment(double tilt);
 
     /// <summary>The law whose density is this one's, reweighted by exp(tilt · draw).</summary>
-    /// <param name="tilt">Any finite number, in reciprocal units of a draw.</param>
+    /// <param name="tilt">A number at which <see cref="LogMoment"/> is finite, in reciprocal units of a draw.</param>
     /// <returns>A law of the same support.</returns>
-    /// <exception cref="ArgumentOutOfRangeException">The tilt is infinite or NaN.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such law, or none within range; or the tilt is NaN.</exception>
     public abstract Law Tilted(double tilt);
 
     /// <summary>The cumulant function about the mean, accurate however small the tilt is.</summary>

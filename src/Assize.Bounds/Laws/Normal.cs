@@ -3,14 +3,14 @@ namespace Assize.Bounds;
 public abstract partial class Law
 {
     /// <summary>A normal draw.</summary>
-    /// <param name="mean">The mean; any finite number.</param>
-    /// <param name="standardDeviation">The standard deviation, in (0, 1e150].</param>
+    /// <param name="mean">The mean; in [-1e100, 1e100].</param>
+    /// <param name="standardDeviation">The standard deviation, in [1e-100, 1e100].</param>
     /// <returns>The normal law.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Law Normal(double mean, double standardDeviation)
     {
-        Check.Finite(mean, nameof(mean));
-        Check.Between(standardDeviation, double.Epsilon, 1e150, nameof(standardDeviation));
+        Check.Between(mean, -Greatest, Greatest, nameof(mean));
+        Check.Between(standardDeviation, Least, Greatest, nameof(standardDeviation));
         return new Normal(mean, standardDeviation);
     }
 }

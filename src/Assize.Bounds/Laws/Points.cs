@@ -4,20 +4,23 @@ namespace Assize.Bounds;
 
 public abstract partial class Law
 {
+    const int MaximumValues = 1_000_000;
+
     /// <summary>A draw from finitely many values.</summary>
     /// <param name="shares">Each value with its share; shares in [0, 1] that add up to 1 within 1e-9. At most 1e6 values.</param>
     /// <returns>The law; shares are divided by their sum.</returns>
-    /// <exception cref="ArgumentException">A value is not finite, a share lies outside [0, 1], or the shares do not add up to 1.</exception>
+    /// <exception cref="ArgumentException">A value is beyond ±1e100, a share lies outside [0, 1], or the shares do not add up to 1.</exception>
     public static Law OnPoints(IReadOnlyDictionary<double, double> shares)
     {
         if (shares is null)
             throw new ArgumentNullException(nameof(shares));
 
+        Check.AtMost(shares.Count, MaximumValues, nameof(shares));
         var kept = shares.Where(share => share.Value != 0).OrderBy(share => share.Key).ToArray();
         double sum = 0;
         foreach (var share in kept)
         {
-            Check.Finite(share.Key, nameof(shares));
+            Check.Between(share.Key, -Greatest, Greatest, nameof(shares));
             Check.Probability(share.Value, nameof(shares));
             sum += share.Value;
         }
@@ -28,14 +31,16 @@ public abstract partial class Law
     }
 
     /// <summary>A whole number, each equally likely.</summary>
-    /// <param name="lower">The least number.</param>
-    /// <param name="upper">The greatest number, itself included; at most 1e6 above the least.</param>
+    /// <param name="lower">The least number, at least -2^52.</param>
+    /// <param name="upper">The greatest number, itself included; at most 2^52 and 1e6 above the least.</param>
     /// <returns>The discrete uniform law.</returns>
     /// <exception cref="ArgumentOutOfRangeException">The greatest number is below the least, or too far above it.</exception>
     public static Law WholeNumbers(long lower, long upper)
     {
         Check.AtLeast(upper, lower, nameof(upper));
-        Check.Between((double)upper - lower, 0, 1_000_000, nameof(upper));
+        Check.Between((double)upper - lower, 0, MaximumValues, nameof(upper));
+        Check.AtLeast(lower, -Binomial.MaximumTrials, nameof(lower));
+        Check.AtMost(upper, Binomial.MaximumTrials, nameof(upper));
         int count = (int)(upper - lower) + 1;
         return new Points([.. Enumerable.Range(0, count).Select(i => (double)(lower + i))], [.. Enumerable.Repeat(1.0 / count, count)]);
     }

@@ -61,5 +61,12 @@ sealed class PoissonCount(double mean) : Law, ILattice
         return mean * Elementary.ExpExcess(tilt);
     }
 
-    public override Law Tilted(double tilt) => new PoissonCount(mean * Elementary.Exp(tilt));
+    public override Law Tilted(double tilt)
+    {
+        Check.Finite(tilt, nameof(tilt));
+        double tilted = mean * Elementary.Exp(tilt);
+        return tilted <= IncompleteGamma.MaximumShape / 2
+            ? new PoissonCount(tilted)
+            : throw new ArgumentOutOfRangeException(nameof(tilt), tilt, "must leave the mean at 5e11 or below.");
+    }
 }

@@ -69,6 +69,32 @@ public class ElementaryTests
         }
     }
 
+    // v²/2 + v³/6 + …, summed in 28 digits.
+    [Fact]
+    public void The_excess_over_the_tangent_keeps_its_digits()
+    {
+        int seen = 0;
+        for (double x = 1e-4; x < 3; x *= 1.1)
+        {
+            foreach (double signed in new[] { x, -x })
+            {
+                decimal exact = (decimal)signed;
+                decimal series = Series(exact * exact / 2, (term, n) => term * exact / (n + 2));
+                double value = (double)exact;
+                Assert.True(ReferenceTable.RelativeError(Elementary.ExpExcess(value), (double)series) < 2e-15, $"{value:R}");
+                seen++;
+            }
+        }
+
+        Assert.True(seen > 200, $"only {seen} arguments");
+        Assert.Equal(0.5, Elementary.ExpExcess(1e-100) / 1e-200, 1e-15);
+        Assert.Equal(Elementary.ExpExcess(Math.BitDecrement(0.7)), Elementary.ExpExcess(0.7), 1e-15);
+        Assert.Equal(
+            (0, 999, double.PositiveInfinity),
+            (Elementary.ExpExcess(0), Elementary.ExpExcess(-1000), Elementary.ExpExcess(double.PositiveInfinity)));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Elementary.ExpExcess(double.NaN));
+    }
+
     [Fact]
     public void Ends_of_the_domain_are_exact()
     {

@@ -26,6 +26,15 @@ public class StirlingErrorTests
         StirlingError.Of(15) - StirlingError.Of(16),
         -Math.Log(16) - 0.5 * Math.Log(15.0 / 16) - 15 * Math.Log(15) + 16 * Math.Log(16) - 1, 2e-14);
 
+    // C(n, k) (k/n)^k (1 - k/n)^(n - k) is the mass at the mean: 6/16 for 2 of 4, 252/1024 for 5 of 10.
+    [Fact]
+    public void The_binomial_part_is_the_mass_at_the_mean()
+    {
+        Assert.Equal(Math.Log(6.0 / 16), StirlingError.OfBinomial(4, 2), 1e-15);
+        Assert.Equal(Math.Log(252.0 / 1024), StirlingError.OfBinomial(10, 5), 1e-15);
+        Assert.Equal((0, 0), (StirlingError.OfBinomial(7, 0), StirlingError.OfBinomial(7, 7)));
+    }
+
     [Fact]
     public void A_large_count_leaves_a_twelfth_of_its_inverse() => Assert.Equal(1 / 12e9, StirlingError.Of(1e9), 1e-25);
 }
