@@ -17,13 +17,16 @@ static class ReferenceTable
     public static double RelativeError(double computed, double truth) =>
         computed == truth ? 0 : Math.Abs(computed - truth) / Math.Abs(truth);
 
-    /// <summary>How far the logarithm of a probability is from the true one, in the relative error of the probability.</summary>
-    /// <remarks>Near 1 the logarithm itself must be accurate; below 1e-300 each further factor of 1e-300 may cost as much again.</remarks>
+    /// <summary>How far the logarithm of a probability is from the true one, in the relative error of the
+    /// probability.</summary>
+    /// <remarks>Near 1 the logarithm itself must be accurate; below 1e-300 each further factor of 1e-300 may cost as
+    /// much again.</remarks>
     public static double LogError(double computed, double truth) => computed == truth
         ? 0
         : Math.Abs(computed - truth) / Math.Max(Math.Min(1, Math.Abs(truth)), Math.Abs(truth) / 690);
 
-    /// <summary>The rows of a table whose error is not within what is allowed, with the worst of all; empty if there is none.</summary>
+    /// <summary>The rows of a table whose error is not within what is allowed, with the worst of all; empty if there is
+    /// none.</summary>
     public static string Misses(string name, double allowed, int expectedRows, Func<Row, double> error)
     {
         var rows = Rows(name).Select(row => (Row: row, Error: error(row))).ToArray();

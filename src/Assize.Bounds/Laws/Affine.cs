@@ -5,7 +5,8 @@ namespace Assize.Bounds;
 public abstract partial class Law
 {
     /// <summary>The law of a draw that is scaled and shifted.</summary>
-    /// <param name="scale">The factor, of magnitude in [1e-100, 1e100]; may be negative. The third moment of the image must be finite.</param>
+    /// <param name="scale">The factor, of magnitude in [1e-100, 1e100]; may be negative. The third moment of the image
+    /// must be finite.</param>
     /// <param name="shift">What is added after scaling, in [-1e100, 1e100].</param>
     /// <returns>The law of scale · draw + shift.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
@@ -32,7 +33,8 @@ sealed class Affine(Law law, double scale, double shift) : Law, ILattice
 
     public override double Variance => scale * scale * law.Variance;
 
-    public override double ThirdAbsoluteCentralMoment => Math.Abs(scale * scale * scale) * law.ThirdAbsoluteCentralMoment;
+    public override double ThirdAbsoluteCentralMoment =>
+        Math.Abs(scale * scale * scale) * law.ThirdAbsoluteCentralMoment;
 
     public override double Minimum => scale * (scale > 0 ? law.Minimum : law.Maximum) + shift;
 

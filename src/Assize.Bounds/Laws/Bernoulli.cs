@@ -50,7 +50,8 @@ sealed class Bernoulli(double rate, double other) : Law, ILattice
         Check.Finite(tilt, nameof(tilt));
         return Math.Abs(tilt) > 1
             ? Math.Max(0, LogMoment(tilt) - tilt * rate)
-            : Elementary.LogOnePlus(rate * Elementary.ExpExcess(tilt * other) + other * Elementary.ExpExcess(-tilt * rate));
+            : Elementary.LogOnePlus(
+                rate * Elementary.ExpExcess(tilt * other) + other * Elementary.ExpExcess(-tilt * rate));
     }
 
     // Both rates are carried: one of them may be too near 1 to be told from it.

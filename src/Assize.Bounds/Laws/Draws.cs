@@ -55,7 +55,8 @@ public sealed class Draws
     /// <summary>The greatest value of the sum, or positive infinity.</summary>
     public double Maximum => Total(law => law.Maximum);
 
-    /// <summary>The mean of the sum minus a total: differences first, so that a common offset costs no digits.</summary>
+    /// <summary>The mean of the sum minus a total: differences first, so that a common offset costs no
+    /// digits.</summary>
     internal double MeanExcess(double total)
     {
         double share = total / _groups.Sum(group => (double)group.Count);

@@ -33,7 +33,8 @@ sealed class Geometric(double rate, double other) : Law, ILattice
 
     public override double Variance => other / (rate * rate);
 
-    // Beyond a whole number m below the mean the count starts anew: E(X - μ)³1{X > m} = q^m (c + 3mσ² + m³), c the third central moment.
+    // Beyond a whole number m below the mean the count starts anew: E(X - μ)³1{X > m} = q^m (c + 3mσ² + m³), c the
+    // third central moment.
     public override double ThirdAbsoluteCentralMoment
     {
         get

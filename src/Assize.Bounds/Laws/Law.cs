@@ -35,7 +35,8 @@ public abstract partial class Law
     /// <summary>The law whose density is this one's, reweighted by exp(tilt · draw).</summary>
     /// <param name="tilt">A number at which <see cref="LogMoment"/> is finite, in reciprocal units of a draw.</param>
     /// <returns>A law of the same support.</returns>
-    /// <exception cref="ArgumentOutOfRangeException">There is no such law, or none within range; or the tilt is NaN.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">There is no such law, or none within range; or the tilt is
+    /// NaN.</exception>
     public abstract Law Tilted(double tilt);
 
     /// <summary>The cumulant function about the mean, accurate however small the tilt is.</summary>

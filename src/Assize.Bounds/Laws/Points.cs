@@ -7,9 +7,11 @@ public abstract partial class Law
     const int MaximumValues = 1_000_000;
 
     /// <summary>A draw from finitely many values.</summary>
-    /// <param name="shares">Each value with its share; shares in [0, 1] that add up to 1 within 1e-9. At most 1e6 values.</param>
+    /// <param name="shares">Each value with its share; shares in [0, 1] that add up to 1 within 1e-9. At most 1e6
+    /// values.</param>
     /// <returns>The law; shares are divided by their sum.</returns>
-    /// <exception cref="ArgumentException">A value is beyond ±1e100, a share lies outside [0, 1], or the shares do not add up to 1.</exception>
+    /// <exception cref="ArgumentException">A value is beyond ±1e100, a share lies outside [0, 1], or the shares do not
+    /// add up to 1.</exception>
     public static Law OnPoints(IReadOnlyDictionary<double, double> shares)
     {
         if (shares is null)
@@ -27,14 +29,16 @@ public abstract partial class Law
 
         return Math.Abs(sum - 1) <= 1e-9
             ? new Points([.. kept.Select(share => share.Key)], [.. kept.Select(share => share.Value / sum)])
-            : throw new ArgumentException($"The shares must add up to 1; they add up to {Check.Text(sum)}.", nameof(shares));
+            : throw new ArgumentException(
+                $"The shares must add up to 1; they add up to {Check.Text(sum)}.", nameof(shares));
     }
 
     /// <summary>A whole number, each equally likely.</summary>
     /// <param name="lower">The least number, at least -2^52.</param>
     /// <param name="upper">The greatest number, itself included; at most 2^52 and 1e6 above the least.</param>
     /// <returns>The discrete uniform law.</returns>
-    /// <exception cref="ArgumentOutOfRangeException">The greatest number is below the least, or too far above it.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">The greatest number is below the least, or too far above
+    /// it.</exception>
     public static Law WholeNumbers(long lower, long upper)
     {
         Check.AtLeast(upper, lower, nameof(upper));
@@ -42,7 +46,8 @@ public abstract partial class Law
         Check.AtLeast(lower, -Binomial.MaximumTrials, nameof(lower));
         Check.AtMost(upper, Binomial.MaximumTrials, nameof(upper));
         int count = (int)(upper - lower) + 1;
-        return new Points([.. Enumerable.Range(0, count).Select(i => (double)(lower + i))], [.. Enumerable.Repeat(1.0 / count, count)]);
+        return new Points([.. Enumerable.Range(0, count).Select(i => (double)(lower + i))],
+            [.. Enumerable.Repeat(1.0 / count, count)]);
     }
 }
 

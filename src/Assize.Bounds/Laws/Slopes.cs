@@ -6,7 +6,8 @@ public abstract partial class Law
     /// <param name="lower">The lower end, at least -1e90.</param>
     /// <param name="upper">The upper end, above the lower one, at most 1e90.</param>
     /// <returns>The uniform law.</returns>
-    /// <exception cref="ArgumentOutOfRangeException">An end lies outside its domain, or the ends do not differ.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">An end lies outside its domain, or the ends do not
+    /// differ.</exception>
     public static Law Uniform(double lower, double upper)
     {
         RequireEnds(lower, upper);
@@ -17,7 +18,8 @@ public abstract partial class Law
     /// <param name="lower">The lower end, at least -1e90.</param>
     /// <param name="upper">The upper end, above the lower one, at most 1e90.</param>
     /// <returns>The symmetric triangular law.</returns>
-    /// <exception cref="ArgumentOutOfRangeException">An end lies outside its domain, or the ends do not differ.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">An end lies outside its domain, or the ends do not
+    /// differ.</exception>
     public static Law Triangular(double lower, double upper)
     {
         RequireEnds(lower, upper);
@@ -32,13 +34,14 @@ public abstract partial class Law
     }
 }
 
-/// <summary>A density of straight pieces, reweighted by exp(tilt · draw): the uniform and triangular laws and what tilting
-/// makes of them.</summary>
-/// <remarks>All is counted from the end with the greatest weight, so that a far tilt, which leaves only a sliver there, costs no
-/// digits. Integrals are Gauss and Legendre's, on stretches short beside 1/tilt.</remarks>
+/// <summary>A density of straight pieces, reweighted by exp(tilt · draw): the uniform and triangular laws and what
+/// tilting makes of them.</summary>
+/// <remarks>All is counted from the end with the greatest weight, so that a far tilt, which leaves only a sliver there,
+/// costs no digits. Integrals are Gauss and Legendre's, on stretches short beside 1/tilt.</remarks>
 sealed class Slopes : Law
 {
-    // The 16-point rule: exact for polynomials of degree 31, so an exponential over two units of its scale costs no digit.
+    // The 16-point rule: exact for polynomials of degree 31, so an exponential over two units of its scale costs no
+    // digit.
     static readonly GaussLegendre Rule = new(16);
 
     readonly double[] _ends;
@@ -95,7 +98,8 @@ sealed class Slopes : Law
 
     double Anchor(double tilt) => tilt > 0 ? Maximum : Minimum;
 
-    // ∫ function(offset) · density · exp(tilt · offset), offset = value - anchor, split at the corners and at one place more.
+    // ∫ function(offset) · density · exp(tilt · offset), offset = value - anchor, split at the corners and at one place
+    // more.
     double Integral(Func<double, double> function, double tilt, double corner)
     {
         double anchor = Anchor(tilt), sum = 0;

@@ -2,8 +2,8 @@ namespace Assize.Bounds;
 
 /// <summary>Exact confidence limits for a rate after a number of successes.</summary>
 /// <remarks>
-/// Rounded outwards: a limit is at least as far from the successes as the true one, by a relative 2e-12 at most of the limit and of
-/// 1 minus the limit. Source: C. J. Clopper and E. S. Pearson, Biometrika 26 (1934) 404–413.
+/// Rounded outwards: a limit is at least as far from the successes as the true one, by a relative 2e-12 at most of the
+/// limit and of 1 minus the limit. Source: C. J. Clopper and E. S. Pearson, Biometrika 26 (1934) 404–413.
 /// </remarks>
 public static class BinomialLimits
 {
@@ -16,7 +16,8 @@ public static class BinomialLimits
     /// <param name="trials">Number of trials, in [1, 2^52].</param>
     /// <param name="successes">Number of successes, in [0, trials].</param>
     /// <param name="risk">The probability that the limit is above the rate, in [1e-250, ½].</param>
-    /// <returns>The rate at which so many successes or more have probability risk, in [0, 1); 0 without a success.</returns>
+    /// <returns>The rate at which so many successes or more have probability risk, in [0, 1); 0 without a
+    /// success.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double Lower(long trials, long successes, double risk)
     {
@@ -25,11 +26,13 @@ public static class BinomialLimits
         return rate ?? Below(1 - other);
     }
 
-    /// <summary>The upper limit for the rate; 1 minus it, without cancellation, is the lower limit for the failures.</summary>
+    /// <summary>The upper limit for the rate; 1 minus it, without cancellation, is the lower limit for the
+    /// failures.</summary>
     /// <param name="trials">Number of trials, in [1, 2^52].</param>
     /// <param name="successes">Number of successes, in [0, trials].</param>
     /// <param name="risk">The probability that the limit is below the rate, in [1e-250, ½].</param>
-    /// <returns>The rate at which so many successes or fewer have probability risk, in (0, 1]; 1 without a failure.</returns>
+    /// <returns>The rate at which so many successes or fewer have probability risk, in (0, 1]; 1 without a
+    /// failure.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double Upper(long trials, long successes, double risk)
     {

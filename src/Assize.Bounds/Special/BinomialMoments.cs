@@ -1,10 +1,12 @@
 namespace Assize.Bounds;
 
-/// <summary>How a binomial count is distributed from a limit on: its mass there and the sums of its excess over the limit.</summary>
+/// <summary>How a binomial count is distributed from a limit on: its mass there and the sums of its excess over the
+/// limit.</summary>
 /// <remarks>Sums of positive terms only; beyond the mode they fall like a geometric series.</remarks>
 readonly struct BinomialMoments
 {
-    BinomialMoments(double mass, double sum0, double sum1, double sum2) => (Mass, Sum0, Sum1, Sum2) = (mass, sum0, sum1, sum2);
+    BinomialMoments(double mass, double sum0, double sum1, double sum2) =>
+        (Mass, Sum0, Sum1, Sum2) = (mass, sum0, sum1, sum2);
 
     /// <summary>ln P(B = limit).</summary>
     public double Mass { get; }

@@ -48,7 +48,8 @@ readonly struct BinomialPoint
             return -trials * LogRate(rate);
 
         double excess = MeanExcess(trials, successes, rate);
-        return CountDeviance.Of(successes, excess, trials * rate) + CountDeviance.Of(trials - successes, -excess, trials * (1 - rate));
+        return CountDeviance.Of(successes, excess, trials * rate)
+            + CountDeviance.Of(trials - successes, -excess, trials * (1 - rate));
     }
 
     public double Mass => Math.Min(1, _factor * Elementary.Exp(_exponent));

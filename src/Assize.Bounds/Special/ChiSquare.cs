@@ -1,7 +1,8 @@
 namespace Assize.Bounds;
 
 /// <summary>Tails and quantiles of the chi-square law.</summary>
-/// <remarks>Relative error of the tails below 5e-13 while the result is above 1e-300, for up to 1e9 degrees of freedom.</remarks>
+/// <remarks>Relative error of the tails below 5e-13 while the result is above 1e-300, for up to 1e9 degrees of
+/// freedom.</remarks>
 public static class ChiSquare
 {
     /// <summary>The probability above a point.</summary>
@@ -38,7 +39,8 @@ public static class ChiSquare
 
     /// <summary>The point that a small probability lies above; relative error below 2e-12.</summary>
     /// <param name="degrees">Degrees of freedom, in [1, 2e9].</param>
-    /// <param name="probability">The probability above the point, in [1e-140, ½]; beyond ½ see <see cref="LowerQuantile"/>.</param>
+    /// <param name="probability">The probability above the point, in [1e-140, ½]; beyond ½ see
+    /// <see cref="LowerQuantile"/>.</param>
     /// <returns>x with P(X &gt; x) = probability, in (0, ∞).</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double UpperQuantile(double degrees, double probability)
@@ -49,7 +51,8 @@ public static class ChiSquare
 
     /// <summary>The point that a small probability lies below; relative error below 2e-12.</summary>
     /// <param name="degrees">Degrees of freedom, in [1, 2e9].</param>
-    /// <param name="probability">The probability below the point, in [1e-140, ½]; beyond ½ see <see cref="UpperQuantile"/>.</param>
+    /// <param name="probability">The probability below the point, in [1e-140, ½]; beyond ½ see
+    /// <see cref="UpperQuantile"/>.</param>
     /// <returns>x with P(X ≤ x) = probability, in (0, ∞).</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double LowerQuantile(double degrees, double probability)

@@ -3,7 +3,8 @@ namespace Assize.Bounds;
 /// <summary>How improbable a count is at a given mean: the exponent of every saddle-point mass.</summary>
 static class CountDeviance
 {
-    /// <summary>count · ln(count / mean) + mean - count, where excess = mean - count is given without cancellation; in [0, ∞].</summary>
+    /// <summary>count · ln(count / mean) + mean - count, where excess = mean - count is given without cancellation; in
+    /// [0, ∞].</summary>
     public static double Of(double count, double excess, double mean)
     {
         if (count == 0)

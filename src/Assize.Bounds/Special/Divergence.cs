@@ -18,8 +18,10 @@ public static class Divergence
         return Between(observed, 1 - observed, rate, 1 - rate, -excess);
     }
 
-    /// <summary>The same where both complements and the difference observed - rate are known without cancellation.</summary>
-    internal static double Between(double observed, double otherObserved, double rate, double otherRate, double difference) =>
+    /// <summary>The same where both complements and the difference observed - rate are known without
+    /// cancellation.</summary>
+    internal static double Between(
+        double observed, double otherObserved, double rate, double otherRate, double difference) =>
         CountDeviance.Of(observed, -difference, rate) + CountDeviance.Of(otherObserved, difference, otherRate);
 
     /// <summary>The greatest rate whose divergence from the observed one stays within a bound.</summary>
@@ -64,7 +66,8 @@ public static class Divergence
 
     // The divergence when one of the two rates has grown, and the other shrunk, by a distance.
     static double Apart(double growing, double shrinking, double distance) =>
-        CountDeviance.Of(growing, distance, growing + distance) + CountDeviance.Of(shrinking, -distance, shrinking - distance);
+        CountDeviance.Of(growing, distance, growing + distance)
+            + CountDeviance.Of(shrinking, -distance, shrinking - distance);
 
     // Up to half of the shrinking rate: the distance itself, so that a small one keeps its digits.
     static double Distance(double growing, double shrinking, double divergence)
@@ -84,7 +87,8 @@ public static class Divergence
     static double Remainder(double growing, double shrinking, double divergence)
     {
         double At(double v) => shrinking * v
-            + CountDeviance.Of(growing, shrinking * -Elementary.ExpMinusOne(-v), growing + shrinking * -Elementary.ExpMinusOne(-v))
+            + CountDeviance.Of(growing, shrinking * -Elementary.ExpMinusOne(-v),
+                growing + shrinking * -Elementary.ExpMinusOne(-v))
             - shrinking * -Elementary.ExpMinusOne(-v) - divergence;
 
         double upper = 2;

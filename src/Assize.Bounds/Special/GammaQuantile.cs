@@ -5,21 +5,25 @@ static class GammaQuantile
 {
     public const double LeastProbability = 1e-140;
 
-    /// <summary>Two neighbouring points around the one with P(X > point) = probability ≤ ½, for a shape of at least ½.</summary>
+    /// <summary>Two neighbouring points around the one with P(X > point) = probability ≤ ½, for a shape of at least
+    /// ½.</summary>
     public static (double Lower, double Upper) AroundUpper(double shape, double probability)
     {
         double wanted = Elementary.Log(probability);
         var (lower, upper) = RootBracket.Find(
-            x => IncompleteGamma.LogUpperTail(shape, Elementary.Exp(x)) - wanted, Least(shape, probability), Most(shape), 4e-16);
+            x => IncompleteGamma.LogUpperTail(shape, Elementary.Exp(x)) - wanted,
+            Least(shape, probability), Most(shape), 4e-16);
         return (Elementary.Exp(lower), Elementary.Exp(upper));
     }
 
-    /// <summary>Two neighbouring points around the one with P(X ≤ point) = probability ≤ ½, for a shape of at least ½.</summary>
+    /// <summary>Two neighbouring points around the one with P(X ≤ point) = probability ≤ ½, for a shape of at least
+    /// ½.</summary>
     public static (double Lower, double Upper) AroundLower(double shape, double probability)
     {
         double wanted = Elementary.Log(probability);
         var (lower, upper) = RootBracket.Find(
-            x => IncompleteGamma.LogLowerTail(shape, Elementary.Exp(x)) - wanted, Least(shape, probability), Most(shape), 4e-16);
+            x => IncompleteGamma.LogLowerTail(shape, Elementary.Exp(x)) - wanted,
+            Least(shape, probability), Most(shape), 4e-16);
         return (Elementary.Exp(lower), Elementary.Exp(upper));
     }
 

@@ -2,8 +2,9 @@ namespace Assize.Bounds;
 
 /// <summary>Probabilities of the number of marked items in a draw without replacement.</summary>
 /// <remarks>
-/// Relative error below 5e-13 while the result is above 1e-300, for populations up to 1e9. Source: the mass as a quotient of
-/// binomial masses at the draw's own rate (C. Loader, 2000); every deviance follows from one exact difference.
+/// Relative error below 5e-13 while the result is above 1e-300, for populations up to 1e9. Source: the mass as a
+/// quotient of binomial masses at the draw's own rate (C. Loader, 2000); every deviance follows from one exact
+/// difference.
 /// </remarks>
 public static class Hypergeometric
 {
@@ -46,7 +47,8 @@ public static class Hypergeometric
             return double.NegativeInfinity;
 
         return successes > Mode(population, marked, drawn)
-            ? Math.Min(0, LogMass(population, marked, drawn, successes) + Elementary.Log(Outward(population, marked, drawn, successes)))
+            ? Math.Min(0, LogMass(population, marked, drawn, successes)
+                + Elementary.Log(Outward(population, marked, drawn, successes)))
             : Elementary.LogOnePlus(-Elementary.Exp(LogLowerTail(population, marked, drawn, successes - 1)));
     }
 
@@ -89,7 +91,8 @@ public static class Hypergeometric
     static double Cells(double successes, double failures, double excess, double rate)
     {
         double all = successes + failures;
-        double deviances = CountDeviance.Of(successes, excess, all * rate) + CountDeviance.Of(failures, -excess, all * (1 - rate));
+        double deviances = CountDeviance.Of(successes, excess, all * rate)
+            + CountDeviance.Of(failures, -excess, all * (1 - rate));
         return successes == 0 || failures == 0
             ? -deviances
             : StirlingError.Of(all) - StirlingError.Of(successes) - StirlingError.Of(failures) - deviances

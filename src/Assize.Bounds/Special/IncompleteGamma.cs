@@ -2,9 +2,9 @@ namespace Assize.Bounds;
 
 /// <summary>The regularised incomplete gamma functions: the tails of a gamma law of scale 1.</summary>
 /// <remarks>
-/// Relative error below 5e-13 while the result is above 1e-300, for shapes up to 1e9; below shape ½ while the result is above 1e-15.
-/// Source: A. Gil, J. Segura and N. M. Temme, SIAM J. Sci. Comput. 34 (2012) A2965–A2981, for the regions; the leading factor
-/// is taken from the deviance, as C. Loader (2000) does for the Poisson mass.
+/// Relative error below 5e-13 while the result is above 1e-300, for shapes up to 1e9; below shape ½ while the result is
+/// above 1e-15. Source: A. Gil, J. Segura and N. M. Temme, SIAM J. Sci. Comput. 34 (2012) A2965–A2981, for the regions;
+/// the leading factor is taken from the deviance, as C. Loader (2000) does for the Poisson mass.
 /// </remarks>
 public static class IncompleteGamma
 {
@@ -23,7 +23,9 @@ public static class IncompleteGamma
         if (double.IsPositiveInfinity(point))
             return 0;
 
-        return IsUpper(shape, point) ? Math.Min(1, Elementary.Exp(LogUpperDirect(shape, point))) : 1 - LowerTail(shape, point);
+        return IsUpper(shape, point)
+            ? Math.Min(1, Elementary.Exp(LogUpperDirect(shape, point)))
+            : 1 - LowerTail(shape, point);
     }
 
     /// <summary>The probability below a point.</summary>
@@ -39,7 +41,9 @@ public static class IncompleteGamma
         if (double.IsPositiveInfinity(point))
             return 1;
 
-        return IsUpper(shape, point) ? 1 - UpperTail(shape, point) : Math.Min(1, Elementary.Exp(LogLowerDirect(shape, point)));
+        return IsUpper(shape, point)
+            ? 1 - UpperTail(shape, point)
+            : Math.Min(1, Elementary.Exp(LogLowerDirect(shape, point)));
     }
 
     /// <summary>The logarithm of the probability above a point; it does not underflow.</summary>
@@ -98,7 +102,8 @@ public static class IncompleteGamma
         return point > 1e60 ? -point : LogFactor(shape, point) + Elementary.Log(shape * GammaFraction.Of(shape, point));
     }
 
-    static double LogLowerDirect(double shape, double point) => LogFactor(shape, point) + Elementary.Log(Series(shape, point));
+    static double LogLowerDirect(double shape, double point) =>
+        LogFactor(shape, point) + Elementary.Log(Series(shape, point));
 
     // x^a e^-x / Γ(a + 1).
     static double LogFactor(double shape, double point)
@@ -106,11 +111,12 @@ public static class IncompleteGamma
         if (shape < 0.5)
             return shape * Elementary.Log(point) - point - LogGamma.OfOnePlus(shape);
 
-        return -CountDeviance.Of(shape, point - shape, point) - StirlingError.Of(shape) - 0.5 * Elementary.Log(2 * Math.PI * shape);
+        return -CountDeviance.Of(shape, point - shape, point) - StirlingError.Of(shape)
+            - 0.5 * Elementary.Log(2 * Math.PI * shape);
     }
 
-    // 1 + x/(a + 1) + x²/((a + 1)(a + 2)) + …: every term positive, and what each addition rounds off (Kahan 1965) is carried on:
-    // 100,000 like terms lose 1e-12 otherwise.
+    // 1 + x/(a + 1) + x²/((a + 1)(a + 2)) + …: every term positive. What an addition rounds off is carried on (Kahan
+    // 1965): 100,000 like terms lose 1e-12 otherwise.
     static double Series(double shape, double point)
     {
         const int cap = 100_000_000;

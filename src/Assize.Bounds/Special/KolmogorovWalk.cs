@@ -1,14 +1,17 @@
 namespace Assize.Bounds;
 
-/// <summary>How likely an empirical distribution of uniform values leaves a band around the truth, summed over where it leaves first.</summary>
+/// <summary>How likely an empirical distribution of uniform values leaves a band around the truth, summed over where it
+/// leaves first.</summary>
 /// <remarks>
-/// Every term is positive, so a small probability keeps its relative accuracy. The counting process is a Poisson process held to
-/// n points; the band's whole-number limits change at 2n places, and between them the count can only grow.
-/// Source: the first-passage decomposition of J. Durbin, Distribution Theory for Tests Based on the Sample Distribution Function (1973), §2.
+/// Every term is positive, so a small probability keeps its relative accuracy. The counting process is a Poisson
+/// process held to n points; the band's whole-number limits change at 2n places, and between them the count can only
+/// grow. Source: the first-passage decomposition of J. Durbin, Distribution Theory for Tests Based on the Sample
+/// Distribution Function (1973), §2.
 /// </remarks>
 sealed class KolmogorovWalk
 {
-    // For a distance up to ½ a path that leaves rises at most three times as fast as usual: e^-3·3^j/j! is below 1e-30 from here on.
+    // For a distance up to ½ a path that leaves rises at most three times as fast as usual: e^-3·3^j/j! is below 1e-30
+    // from here on.
     const int LargestStep = 60;
 
     readonly int _trials;
@@ -25,13 +28,15 @@ sealed class KolmogorovWalk
         _alive[0] = 1;
     }
 
-    /// <summary>P(D ≥ distance) for a distance in (0, ½], where the band reaches so many counts: trials · distance.</summary>
+    /// <summary>P(D ≥ distance) for a distance in (0, ½], where the band reaches so many counts: trials ·
+    /// distance.</summary>
     public static double Leaves(int trials, double reach)
     {
         var walk = new KolmogorovWalk(trials);
         double fraction = reach - Math.Floor(reach);
 
-        // With places in units of 1/n: the upper limit grows where place + reach is whole, the lower one where place - reach is.
+        // With places in units of 1/n: the upper limit grows where place + reach is whole, the lower one where place -
+        // reach is.
         double upperAt = 1 - fraction;
         double lowerAt = fraction == 0 ? 1 : fraction;
         bool upperFirst = upperAt <= lowerAt;
@@ -83,6 +88,7 @@ sealed class KolmogorovWalk
         double mass = _alive[count];
         _alive[count] = 0;
         if (mass > 0)
-            _left += Elementary.Exp(Elementary.Log(mass) + Poisson.LogMass(_trials - place, _trials - count) - Poisson.LogMass(_trials, _trials));
+            _left += Elementary.Exp(Elementary.Log(mass) + Poisson.LogMass(_trials - place, _trials - count)
+                - Poisson.LogMass(_trials, _trials));
     }
 }

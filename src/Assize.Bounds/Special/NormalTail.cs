@@ -85,7 +85,8 @@ public static class NormalTail
                 return point;
         }
 
-        throw new InvalidOperationException($"The normal quantile at {Check.Text(central)} from the middle did not settle.");
+        throw new InvalidOperationException(
+            $"The normal quantile at {Check.Text(central)} from the middle did not settle.");
     }
 
     static double FarQuantile(double logarithm)

@@ -18,7 +18,8 @@ public static class Poisson
             return -mean;
 
         // C. Loader, Fast and accurate computation of binomial probabilities (2000), for the Poisson mass.
-        return -CountDeviance.Of(count, mean - count, mean) - StirlingError.Of(count) - 0.5 * Elementary.Log(2 * Math.PI * count);
+        return -CountDeviance.Of(count, mean - count, mean) - StirlingError.Of(count)
+            - 0.5 * Elementary.Log(2 * Math.PI * count);
     }
 
     /// <summary>The probability of so many or more.</summary>

@@ -15,7 +15,8 @@ public static class PoissonLimits
     /// <summary>The lower limit for the mean.</summary>
     /// <param name="count">The count, in [0, 1e9].</param>
     /// <param name="risk">The probability that the limit is above the mean, in [1e-140, ½].</param>
-    /// <returns>The mean at which such a count or a greater one has probability risk, in [0, ∞); 0 for a count of 0.</returns>
+    /// <returns>The mean at which such a count or a greater one has probability risk, in [0, ∞); 0 for a count of
+    /// 0.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double Lower(long count, double risk)
     {

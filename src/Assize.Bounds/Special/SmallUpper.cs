@@ -1,9 +1,11 @@
 namespace Assize.Bounds;
 
-/// <summary>The upper tail of a gamma law of shape and point below 1, where the tail can be small only because the shape is.</summary>
+/// <summary>The upper tail of a gamma law of shape and point below 1, where the tail can be small only because the
+/// shape is.</summary>
 static class SmallUpper
 {
-    /// <summary>ln Q: Q = (1 - x^a / Γ(a + 1)) - x^a / Γ(a + 1) · a Σ_{k≥1} (-x)^k / (k! (a + k)), both parts positive.</summary>
+    /// <summary>ln Q: Q = (1 - x^a / Γ(a + 1)) - x^a / Γ(a + 1) · a Σ_{k≥1} (-x)^k / (k! (a + k)), both parts
+    /// positive.</summary>
     public static double Log(double shape, double point)
     {
         double exponent = shape * Elementary.Log(point) - LogGammaOnePlus(shape);

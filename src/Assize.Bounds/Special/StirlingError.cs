@@ -47,7 +47,8 @@ static class StirlingError
         return sum;
     }
 
-    /// <summary>The part of ln P(B = k) that does not depend on the rate: a deviance is still to be taken off.</summary>
+    /// <summary>The part of ln P(B = k) that does not depend on the rate: a deviance is still to be taken
+    /// off.</summary>
     public static double OfBinomial(double n, double k) => k == 0 || k == n
         ? 0
         : Of(n) - Of(k) - Of(n - k) + 0.5 * Elementary.Log(n / (2 * Math.PI * k * (n - k)));

@@ -1,7 +1,8 @@
 namespace Assize.Bounds;
 
 /// <summary>The upper tail and quantile of Student's law.</summary>
-/// <remarks>Relative error of the tail below 5e-13 while the result is above 1e-300, for up to 1e9 degrees of freedom.</remarks>
+/// <remarks>Relative error of the tail below 5e-13 while the result is above 1e-300, for up to 1e9 degrees of
+/// freedom.</remarks>
 public static class Student
 {
     /// <summary>The probability above a point.</summary>

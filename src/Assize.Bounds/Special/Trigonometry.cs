@@ -13,13 +13,15 @@ static class Trigonometry
     public static double Sine(double angle)
     {
         var (quarter, rest) = Reduce(angle);
-        return quarter switch { 0 => SineNear(rest), 1 => CosineNear(rest), 2 => -SineNear(rest), _ => -CosineNear(rest) };
+        return quarter switch { 0 => SineNear(rest), 1 => CosineNear(rest), 2 => -SineNear(rest), _ =>
+            -CosineNear(rest) };
     }
 
     public static double Cosine(double angle)
     {
         var (quarter, rest) = Reduce(angle);
-        return quarter switch { 0 => CosineNear(rest), 1 => -SineNear(rest), 2 => -CosineNear(rest), _ => SineNear(rest) };
+        return quarter switch { 0 => CosineNear(rest), 1 => -SineNear(rest), 2 => -CosineNear(rest), _ =>
+            SineNear(rest) };
     }
 
     /// <summary>The angle of the point (x, y) from the positive x axis, in [-π, π]; 0 at the origin.</summary>

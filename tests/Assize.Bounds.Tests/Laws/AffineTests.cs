@@ -2,7 +2,8 @@ namespace Assize.Bounds.Tests;
 
 public class AffineTests
 {
-    static readonly (double Value, double Weight)[] Die = [.. Enumerable.Range(1, 6).Select(side => ((double)side, 1.0))];
+    static readonly (double Value,
+        double Weight)[] Die = [.. Enumerable.Range(1, 6).Select(side => ((double)side, 1.0))];
 
     [Theory]
     [InlineData(2, 3)]
@@ -25,7 +26,8 @@ public class AffineTests
     {
         (double Value, double Weight)[] masses = [.. Die.Select(mass => (scale * mass.Value + shift, mass.Weight))];
 
-        LawContract.TurnsOnItsLattice(Law.WholeNumbers(1, 6).Image(scale, shift), masses, scale + shift, Math.Abs(scale));
+        LawContract.TurnsOnItsLattice(
+            Law.WholeNumbers(1, 6).Image(scale, shift), masses, scale + shift, Math.Abs(scale));
     }
 
     [Fact]

@@ -2,7 +2,8 @@ namespace Assize.Bounds.Tests;
 
 public class DrawsTests
 {
-    static readonly Draws Mixed = Draws.Of([(Law.WholeNumbers(1, 6), 3), (Law.Bernoulli(0.25), 8), (Law.Uniform(-1, 0), 2)]);
+    static readonly Draws Mixed = Draws.Of(
+        [(Law.WholeNumbers(1, 6), 3), (Law.Bernoulli(0.25), 8), (Law.Uniform(-1, 0), 2)]);
 
     [Fact]
     public void Moments_of_the_sum_add_up()
@@ -38,12 +39,14 @@ public class DrawsTests
     public void Cumulants_and_tilted_means_agree_with_sums_over_all_outcomes()
     {
         var draws = Draws.Of(Law.WholeNumbers(1, 6), 2);
-        int[] throws = [.. from first in Enumerable.Range(1, 6) from second in Enumerable.Range(1, 6) select first + second];
+        int[] throws = [.. from first in Enumerable.Range(1, 6) from second in Enumerable.Range(1, 6) select first
+            + second];
         foreach (double tilt in new[] { 0.01, 0.7, -2 })
         {
             double moment = throws.Average(sum => Math.Exp(tilt * (sum - 7)));
             Assert.Equal(Math.Log(moment), draws.CentralLogMoment(tilt), 1e-14);
-            Assert.Equal(throws.Average(sum => sum * Math.Exp(tilt * (sum - 7))) / moment, draws.Tilted(tilt).Mean, 1e-13);
+            Assert.Equal(throws.Average(sum => sum * Math.Exp(tilt * (sum - 7))) / moment, draws.Tilted(tilt).Mean,
+                1e-13);
             Assert.Equal(-draws.Tilted(tilt).Mean, draws.Mirrored().Tilted(-tilt).Mean, 1e-13);
         }
 

@@ -16,7 +16,8 @@ public class GammaTests
             centre - 45 / Math.Min(shape, root), centre + Math.Min(6, 45 / root), 1e-3 / Math.Max(1, root),
             Math.Exp, u => shape * (u - centre) - (Math.Exp(u) / scale - shape));
 
-        LawContract.AgreesWithSums(Law.Gamma(shape, scale), grid, 2e-12, 0.3 / (scale * root), -3 / (scale * root), -1e-3 / (scale * root));
+        LawContract.AgreesWithSums(
+            Law.Gamma(shape, scale), grid, 2e-12, 0.3 / (scale * root), -3 / (scale * root), -1e-3 / (scale * root));
     }
 
     [Fact]
@@ -45,7 +46,8 @@ public class GammaTests
     public void No_expectation_exists_from_the_reciprocal_scale_on()
     {
         foreach (double tilt in new[] { 0.5, 0.6, 1e300 })
-            Assert.Equal((double.PositiveInfinity, double.PositiveInfinity), (Law.Gamma(3, 2).LogMoment(tilt), Law.Gamma(3, 2).CentralLogMoment(tilt)));
+            Assert.Equal((double.PositiveInfinity, double.PositiveInfinity),
+                (Law.Gamma(3, 2).LogMoment(tilt), Law.Gamma(3, 2).CentralLogMoment(tilt)));
         Assert.True(double.IsFinite(Law.Gamma(3, 2).LogMoment(0.4999999)));
         Assert.Equal((0, double.PositiveInfinity), (Law.Gamma(3, 2).Minimum, Law.Gamma(3, 2).Maximum));
     }

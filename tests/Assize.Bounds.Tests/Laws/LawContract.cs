@@ -2,14 +2,17 @@ using System.Numerics;
 
 namespace Assize.Bounds.Tests;
 
-/// <summary>What holds for every law, asked of its masses (or of a density on a fine grid) and of its own cumulants.</summary>
+/// <summary>What holds for every law, asked of its masses (or of a density on a fine grid) and of its own
+/// cumulants.</summary>
 static class LawContract
 {
     /// <summary>Moments and cumulants against plain sums over values and weights, which need not add up to 1.</summary>
-    public static void AgreesWithSums(Law law, (double Value, double Weight)[] masses, double accuracy, params double[] tilts)
+    public static void AgreesWithSums(
+        Law law, (double Value, double Weight)[] masses, double accuracy, params double[] tilts)
     {
         double whole = masses.Sum(mass => mass.Weight);
-        double Expected(Func<double, double> function) => masses.Sum(mass => mass.Weight * function(mass.Value)) / whole;
+        double Expected(Func<double, double> function) =>
+            masses.Sum(mass => mass.Weight * function(mass.Value)) / whole;
 
         double mean = Expected(value => value);
         Close(mean, law.Mean, accuracy * (1 + Math.Sqrt(law.Variance)), "mean");
@@ -19,13 +22,16 @@ static class LawContract
         foreach (double tilt in tilts)
         {
             double cumulant = Math.Log(Expected(value => Math.Exp(tilt * (value - law.Mean))));
-            Close(cumulant, law.CentralLogMoment(tilt), accuracy * (1 + Math.Abs(cumulant)), $"central cumulant at {tilt}");
+            Close(cumulant, law.CentralLogMoment(tilt), accuracy * (1 + Math.Abs(cumulant)),
+                $"central cumulant at {tilt}");
             double all = cumulant + tilt * law.Mean;
-            Close(all, law.LogMoment(tilt), accuracy * (1 + Math.Abs(cumulant) + Math.Abs(tilt * law.Mean)), $"cumulant at {tilt}");
+            Close(all, law.LogMoment(tilt), accuracy * (1 + Math.Abs(cumulant) + Math.Abs(tilt * law.Mean)),
+                $"cumulant at {tilt}");
         }
     }
 
-    /// <summary>The tilted law has the slopes of the cumulant for its moments, and tilting back gives the law again.</summary>
+    /// <summary>The tilted law has the slopes of the cumulant for its moments, and tilting back gives the law
+    /// again.</summary>
     public static void TiltsConsistently(Law law, params double[] tilts)
     {
         Assert.Equal((0, 0), (law.LogMoment(0), law.CentralLogMoment(0)));
@@ -38,11 +44,13 @@ static class LawContract
             double bend = (law.Tilted(tilt + step).Mean - law.Tilted(tilt - step).Mean) / (2 * step);
             Close(bend, tilted.Variance, 1e-6 * bend, $"variance at {tilt}");
             Assert.Equal((law.Minimum, law.Maximum), (tilted.Minimum, tilted.Maximum));
-            Close(law.Mean, tilted.Tilted(-tilt).Mean, 1e-10 * (Math.Abs(law.Mean) + Math.Sqrt(law.Variance)), $"mean after {tilt} and back");
+            Close(law.Mean, tilted.Tilted(-tilt).Mean, 1e-10 * (Math.Abs(law.Mean) + Math.Sqrt(law.Variance)),
+                $"mean after {tilt} and back");
             // K(t + s) = K(t) + K_t(s) ties the tilted law's own cumulant to the first law's.
             double further = 0.3 * Unit(tilted);
             double both = law.LogMoment(tilt + further) - law.LogMoment(tilt) - further * tilted.Mean;
-            Close(both, tilted.CentralLogMoment(further), 1e-10 * (1 + Math.Abs(law.LogMoment(tilt))), $"cumulant of the law tilted by {tilt}");
+            Close(both, tilted.CentralLogMoment(further), 1e-10 * (1 + Math.Abs(law.LogMoment(tilt))),
+                $"cumulant of the law tilted by {tilt}");
         }
 
         double small = 1e-7 * Unit(law);
@@ -64,7 +72,8 @@ static class LawContract
             foreach (var (value, weight) in masses)
                 sum += weight * Complex.Exp(new Complex(0, angle * (value - law.Mean) / step));
             var computed = Complex.Exp(lattice.LogCharacteristic(angle, step));
-            Assert.True((sum / masses.Sum(mass => mass.Weight) - computed).Magnitude < 2e-13, $"angle {angle}: {sum} {computed}");
+            Assert.True((sum / masses.Sum(mass => mass.Weight) - computed).Magnitude < 2e-13,
+                $"angle {angle}: {sum} {computed}");
         }
 
         double turn = 1e-7 * step * Unit(law);
@@ -83,7 +92,8 @@ static class LawContract
     public static void Close(double expected, double actual, double allowed, string what) =>
         Assert.True(Math.Abs(expected - actual) <= allowed, $"{what}: {actual:R} instead of {expected:R}");
 
-    /// <summary>A density on an even grid, in a variable that the value is a function of: the trapezoidal rule.</summary>
+    /// <summary>A density on an even grid, in a variable that the value is a function of: the trapezoidal
+    /// rule.</summary>
     public static (double Value, double Weight)[] Grid(
         double lower, double upper, double step, Func<double, double> value, Func<double, double> logDensity) =>
         [.. Enumerable.Range(0, (int)((upper - lower) / step) + 1).Select(i => lower + i * step)

@@ -6,7 +6,8 @@ public class NormalTests
     [InlineData(0, 1)]
     [InlineData(-3, 0.2)]
     [InlineData(10, 4)]
-    public void Moments_and_cumulants_agree_with_sums_over_the_density(double mean, double deviation) => LawContract.AgreesWithSums(
+    public void Moments_and_cumulants_agree_with_sums_over_the_density(double mean, double deviation) =>
+        LawContract.AgreesWithSums(
         Law.Normal(mean, deviation),
         LawContract.Grid(-20, 20, 1e-3, z => mean + z * deviation, z => -z * z / 2),
         1e-12, 0.1 / deviation, -2 / deviation, 5 / deviation);
@@ -16,7 +17,8 @@ public class NormalTests
 
     [Fact]
     public void The_support_is_the_whole_line() =>
-        Assert.Equal((double.NegativeInfinity, double.PositiveInfinity), (Law.Normal(0, 1).Minimum, Law.Normal(0, 1).Maximum));
+        Assert.Equal((double.NegativeInfinity, double.PositiveInfinity),
+            (Law.Normal(0, 1).Minimum, Law.Normal(0, 1).Maximum));
 
     [Fact]
     public void Arguments_outside_the_domain_are_refused()

@@ -12,15 +12,18 @@ public class PointsTests
         int seen = 0;
         for (int i = 0; i < 2000; i++)
         {
-            var sixteenths = Enumerable.Range(0, 16).GroupBy(_ => random.Next(-1000, 1000)).ToDictionary(group => group.Key, group => group.Count());
+            var sixteenths = Enumerable.Range(0, 16).GroupBy(_ => random.Next(-1000, 1000)).ToDictionary(
+                group => group.Key, group => group.Count());
             var law = Law.OnPoints(sixteenths.ToDictionary(pair => (double)pair.Key, pair => pair.Value / 16.0));
             BigInteger mean = sixteenths.Aggregate(BigInteger.Zero, (sum, pair) => sum + pair.Key * pair.Value);
             BigInteger Central(int power) => sixteenths.Aggregate(
-                BigInteger.Zero, (sum, pair) => sum + pair.Value * BigInteger.Abs(BigInteger.Pow(16 * pair.Key - mean, power)));
+                BigInteger.Zero, (sum, pair) =>
+                    sum + pair.Value * BigInteger.Abs(BigInteger.Pow(16 * pair.Key - mean, power)));
 
             LawContract.Close((double)mean / 16, law.Mean, 1e-12, "mean");
             LawContract.Close((double)Central(2) / 4096, law.Variance, 1e-13 * law.Variance, "variance");
-            LawContract.Close((double)Central(3) / 65536, law.ThirdAbsoluteCentralMoment, 1e-13 * law.ThirdAbsoluteCentralMoment, "third moment");
+            LawContract.Close((double)Central(3) / 65536, law.ThirdAbsoluteCentralMoment,
+                1e-13 * law.ThirdAbsoluteCentralMoment, "third moment");
             Assert.Equal((sixteenths.Keys.Min(), sixteenths.Keys.Max()), (law.Minimum, law.Maximum));
             seen++;
         }
@@ -50,7 +53,8 @@ public class PointsTests
         Assert.Equal(1, Law.WholeNumbers(-500_000, 500_000).Variance / (1_000_001.0 * 1_000_001 - 1) * 12, 1e-10);
     }
 
-    static bool Near((double, double) a, (double, double) b) => Math.Abs(a.Item1 - b.Item1) + Math.Abs(a.Item2 - b.Item2) < 1e-14;
+    static bool Near((double, double) a, (double, double) b) =>
+        Math.Abs(a.Item1 - b.Item1) + Math.Abs(a.Item2 - b.Item2) < 1e-14;
 
     [Fact]
     public void A_large_offset_costs_no_digit_of_the_spread() =>
@@ -60,7 +64,8 @@ public class PointsTests
     public void Tilted_laws_follow_the_cumulant()
     {
         LawContract.TiltsConsistently(Law.WholeNumbers(1, 6), 1, -2, 0);
-        LawContract.TiltsConsistently(Law.OnPoints(new Dictionary<double, double> { [0] = 0.999, [1000] = 0.001 }), 0.005, -0.001);
+        LawContract.TiltsConsistently(
+            Law.OnPoints(new Dictionary<double, double> { [0] = 0.999, [1000] = 0.001 }), 0.005, -0.001);
     }
 
     [Fact]
@@ -95,11 +100,14 @@ public class PointsTests
     [Fact]
     public void Shares_that_are_none_are_refused()
     {
-        foreach (var (value, share) in new[] { (double.NaN, 0.5), (1.01e100, 0.5), (1, -0.5), (1, double.NaN), (1, 1.5), (1, 0.4), (1, 0.50001) })
-            Assert.ThrowsAny<ArgumentException>(() => Law.OnPoints(new Dictionary<double, double> { [0] = 0.5, [value] = share }));
+        foreach (var (value, share) in new[] { (double.NaN, 0.5), (1.01e100, 0.5), (1, -0.5), (1, double.NaN),
+            (1, 1.5), (1, 0.4), (1, 0.50001) })
+            Assert.ThrowsAny<ArgumentException>(
+                () => Law.OnPoints(new Dictionary<double, double> { [0] = 0.5, [value] = share }));
         Assert.Throws<ArgumentNullException>(() => Law.OnPoints(null!));
         Assert.Throws<ArgumentException>(() => Law.OnPoints(new Dictionary<double, double>()));
-        string message = Assert.Throws<ArgumentException>(() => Law.OnPoints(new Dictionary<double, double> { [0] = 0.25 })).Message;
+        string message = Assert.Throws<ArgumentException>(
+            () => Law.OnPoints(new Dictionary<double, double> { [0] = 0.25 })).Message;
         Assert.Contains("add up to 0.25", message, StringComparison.Ordinal);
     }
 
@@ -108,7 +116,8 @@ public class PointsTests
     {
         foreach (var (lower, upper) in new[]
         {
-            (2L, 1L), (0, 1_000_001), (long.MinValue, long.MaxValue), (long.MaxValue - 1, long.MaxValue), (long.MinValue, long.MinValue + 1),
+            (2L, 1L), (0, 1_000_001), (long.MinValue, long.MaxValue), (long.MaxValue - 1, long.MaxValue),
+                (long.MinValue, long.MinValue + 1),
         })
             Assert.Throws<ArgumentOutOfRangeException>(() => Law.WholeNumbers(lower, upper));
         LawContract.RefusesTiltsWithoutALaw(Law.WholeNumbers(1, 6), double.PositiveInfinity);

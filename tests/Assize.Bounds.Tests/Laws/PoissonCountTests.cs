@@ -39,7 +39,8 @@ public class PoissonCountTests
     }
 
     [Fact]
-    public void A_far_tilt_leaves_no_count() => Assert.Equal((0, 0), (Law.Poisson(3).Tilted(-1e9).Mean, Law.Poisson(3).Tilted(-1e9).Variance));
+    public void A_far_tilt_leaves_no_count() =>
+        Assert.Equal((0, 0), (Law.Poisson(3).Tilted(-1e9).Mean, Law.Poisson(3).Tilted(-1e9).Variance));
 
     [Fact]
     public void Arguments_outside_the_domain_are_refused()

@@ -90,7 +90,8 @@ public class SlopesTests
         // Exponential of rate 1e6 from the end: -ln(1 + s) + s for s = tilt/1e6, to the sliver's own accuracy.
         var law = Law.Uniform(0, 1).Tilted(1e6);
         foreach (double share in new[] { 1e-4, -1e-4, 0.3, -0.3 })
-            Assert.Equal(1, law.CentralLogMoment(share * 1e6) / (share - Math.Log(1 + share)), 1e-11 + 2e-15 / (share * share));
+            Assert.Equal(1, law.CentralLogMoment(share * 1e6) / (share - Math.Log(1 + share)),
+                1e-11 + 2e-15 / (share * share));
     }
 
     [Fact]
@@ -98,7 +99,8 @@ public class SlopesTests
     {
         foreach (var (lower, upper) in new[]
         {
-            (0.0, 0.0), (1, 0), (double.NaN, 1), (0, double.NaN), (double.NegativeInfinity, 0), (0, double.PositiveInfinity), (-1.01e90, 0),
+            (0.0, 0.0), (1, 0), (double.NaN, 1), (0, double.NaN), (double.NegativeInfinity, 0),
+                (0, double.PositiveInfinity), (-1.01e90, 0),
         })
         {
             Assert.Throws<ArgumentOutOfRangeException>(() => Law.Uniform(lower, upper));

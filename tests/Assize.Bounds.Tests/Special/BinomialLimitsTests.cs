@@ -6,7 +6,8 @@ public class BinomialLimitsTests
     const double Accuracy = 2e-12;
 
     [Fact]
-    public void Limits_enclose_those_of_eighty_digits_closely() => Assert.Empty(ReferenceTable.Misses("clopper_pearson", Accuracy, 304, row =>
+    public void Limits_enclose_those_of_eighty_digits_closely() => Assert.Empty(ReferenceTable.Misses(
+        "clopper_pearson", Accuracy, 304, row =>
     {
         var (trials, successes, risk) = (row.Whole("n"), row.Whole("k"), row.Number("alpha") / 2);
         double lower = BinomialLimits.Lower(trials, successes, risk);
@@ -33,8 +34,10 @@ public class BinomialLimitsTests
                 for (int successes = 1; successes <= trials; successes++)
                 {
                     double limit = BinomialLimits.Lower(trials, successes, risk);
-                    Assert.True(Exceeds(trials, successes, limit, risk) <= 0, $"{successes}/{trials} {risk}: {limit:R}");
-                    Assert.True(Exceeds(trials, successes, limit + 4e-12 * Math.Min(limit, 1 - limit) + 3e-16, risk) > 0);
+                    Assert.True(Exceeds(trials, successes, limit, risk) <= 0,
+                        $"{successes}/{trials} {risk}: {limit:R}");
+                    Assert.True(Exceeds(trials, successes, limit + 4e-12 * Math.Min(limit, 1 - limit) + 3e-16,
+                        risk) > 0);
                     seen++;
                 }
             }
@@ -53,7 +56,8 @@ public class BinomialLimitsTests
         for (int k = 0; k <= trials; k++)
         {
             if (k >= successes)
-                sum += ways * System.Numerics.BigInteger.Pow(p, k) * System.Numerics.BigInteger.Pow(one - p, trials - k);
+                sum += ways * System.Numerics.BigInteger.Pow(p, k)
+                    * System.Numerics.BigInteger.Pow(one - p, trials - k);
             ways = ways * (trials - k) / (k + 1);
         }
 
@@ -102,7 +106,8 @@ public class BinomialLimitsTests
     {
         foreach (var (trials, successes, risk, name) in new[]
         {
-            (0L, 0L, 0.1, "trials"), ((1L << 52) + 1, 1, 0.1, "trials"), (5, -1, 0.1, "successes"), (5, 6, 0.1, "successes"),
+            (0L, 0L, 0.1, "trials"), ((1L << 52) + 1, 1, 0.1, "trials"), (5, -1, 0.1, "successes"),
+                (5, 6, 0.1, "successes"),
             (5, 1, 0, "risk"), (5, 1, 0.51, "risk"), (5, 1, double.NaN, "risk"), (5, 1, -1, "risk"),
         })
         {

@@ -18,7 +18,8 @@ public class BinomialMomentsTests
                     for (int k = limit; k <= trials; k++)
                     {
                         double share = Ways(trials, k, tenths) / first;
-                        sums = [sums[0] + share, sums[1] + share * (k - limit), sums[2] + share * (k - limit) * (k - limit)];
+                        sums = [sums[0] + share, sums[1] + share * (k - limit),
+                            sums[2] + share * (k - limit) * (k - limit)];
                     }
 
                     Assert.Equal(Math.Log(first) - trials * Math.Log(10), moments.Mass, 1e-12);
@@ -39,7 +40,8 @@ public class BinomialMomentsTests
         System.Numerics.BigInteger ways = 1;
         for (int i = 0; i < successes; i++)
             ways = ways * (trials - i) / (i + 1);
-        return (double)(ways * System.Numerics.BigInteger.Pow(tenths, successes) * System.Numerics.BigInteger.Pow(10 - tenths, trials - successes));
+        return (double)(ways * System.Numerics.BigInteger.Pow(tenths, successes)
+            * System.Numerics.BigInteger.Pow(10 - tenths, trials - successes));
     }
 
     [Theory]

@@ -11,7 +11,8 @@ public class CharacteristicTests
         for (int i = 0; i < 10_000; i++)
         {
             double angle = (random.NextDouble() - 0.5) * 20;
-            Assert.True((Characteristic.Turn(angle) - (Complex.Exp(new Complex(0, angle)) - 1)).Magnitude < 1e-15, $"{angle:R}");
+            Assert.True((Characteristic.Turn(angle) - (Complex.Exp(new Complex(0, angle)) - 1)).Magnitude < 1e-15,
+                $"{angle:R}");
         }
     }
 

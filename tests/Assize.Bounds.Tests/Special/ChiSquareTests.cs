@@ -7,7 +7,8 @@ public class ChiSquareTests
     const double QuantileAccuracy = 2e-12;
 
     [Fact]
-    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses("chi2_tail", Accuracy, 213, row =>
+    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "chi2_tail", Accuracy, 213, row =>
     {
         var (degrees, point) = (row.Number("df"), row.Number("x"));
         return Math.Max(
@@ -16,7 +17,8 @@ public class ChiSquareTests
     }));
 
     [Fact]
-    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses("chi2_tail", 1e-12, 213, row =>
+    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses(
+        "chi2_tail", 1e-12, 213, row =>
     {
         var (degrees, point) = (row.Number("df"), row.Number("x"));
         var (upper, lower) = (row.Number("ln_sf"), row.Number("ln_cdf"));
@@ -26,7 +28,8 @@ public class ChiSquareTests
     }));
 
     [Fact]
-    public void Quantiles_lead_back_to_the_points_of_the_table() => Assert.Empty(ReferenceTable.Misses("chi2_tail", 0, 213, row =>
+    public void Quantiles_lead_back_to_the_points_of_the_table() => Assert.Empty(ReferenceTable.Misses(
+        "chi2_tail", 0, 213, row =>
     {
         var (degrees, point) = (row.Number("df"), row.Number("x"));
         var (upper, lower) = (Math.Exp(row.Number("ln_sf")), Math.Exp(row.Number("ln_cdf")));
@@ -35,7 +38,8 @@ public class ChiSquareTests
             lower is >= 1e-140 and <= 0.5 ? Excess(ChiSquare.LowerQuantile(degrees, lower), point) : 0);
     }));
 
-    static double Excess(double computed, double truth) => Math.Max(0, ReferenceTable.RelativeError(computed, truth) - QuantileAccuracy);
+    static double Excess(double computed, double truth) =>
+        Math.Max(0, ReferenceTable.RelativeError(computed, truth) - QuantileAccuracy);
 
     // NIST/SEMATECH e-Handbook of Statistical Methods, §1.3.6.7.4, critical values of the chi-square distribution.
     [Theory]
@@ -52,7 +56,8 @@ public class ChiSquareTests
         for (double point = 1e-9; point < 1300; point *= 1.7)
         {
             Assert.True(ReferenceTable.LogError(ChiSquare.LogUpperTail(2, point), -point / 2) <= Accuracy, $"{point}");
-            Assert.True(ReferenceTable.RelativeError(ChiSquare.LowerTail(2, point), -Elementary.ExpMinusOne(-point / 2)) <= Accuracy, $"{point}");
+            Assert.True(ReferenceTable.RelativeError(
+                ChiSquare.LowerTail(2, point), -Elementary.ExpMinusOne(-point / 2)) <= Accuracy, $"{point}");
         }
 
         foreach (double probability in new[] { 1e-140, 1e-20, 0.01, 0.5 })
@@ -63,7 +68,8 @@ public class ChiSquareTests
     public void Both_quantiles_meet_in_the_median()
     {
         foreach (double degrees in new[] { 1, 1.5, 2, 31, 1e4, 1e7, 2e9 })
-            Assert.Equal(1, ChiSquare.UpperQuantile(degrees, 0.5) / ChiSquare.LowerQuantile(degrees, 0.5), 2 * QuantileAccuracy);
+            Assert.Equal(1, ChiSquare.UpperQuantile(degrees, 0.5) / ChiSquare.LowerQuantile(degrees, 0.5),
+                2 * QuantileAccuracy);
     }
 
     [Fact]

@@ -20,7 +20,8 @@ public class CountDevianceTests
     public void Near_the_mean_it_keeps_its_digits(double count, double excess)
     {
         double r = excess / count;
-        Assert.Equal(1, CountDeviance.Of(count, excess, count + excess) / (count * r * r * (0.5 - r / 3 + r * r / 4)), 1e-15);
+        Assert.Equal(1, CountDeviance.Of(count, excess, count + excess) / (count * r * r * (0.5 - r / 3 + r * r / 4)),
+            1e-15);
     }
 
     [Fact]

@@ -51,7 +51,8 @@ public class ElementaryTests
     [Fact]
     public void One_undoes_the_other_on_both_sides_of_every_crossing()
     {
-        foreach (double value in new[] { -0.999, -0.51, -0.49, -0.29, -0.2899, 0.4099, 0.41, 0.99, 1.01, 50, 1e10, 1e16, 1e300 })
+        foreach (double value in new[] { -0.999, -0.51, -0.49, -0.29, -0.2899, 0.4099, 0.41, 0.99, 1.01, 50, 1e10,
+            1e16, 1e300 })
             Assert.True(
                 ReferenceTable.RelativeError(Elementary.ExpMinusOne(Elementary.LogOnePlus(value)), value) < 1e-13,
                 $"{value}");
@@ -81,7 +82,8 @@ public class ElementaryTests
                 decimal exact = (decimal)signed;
                 decimal series = Series(exact * exact / 2, (term, n) => term * exact / (n + 2));
                 double value = (double)exact;
-                Assert.True(ReferenceTable.RelativeError(Elementary.ExpExcess(value), (double)series) < 2e-15, $"{value:R}");
+                Assert.True(ReferenceTable.RelativeError(Elementary.ExpExcess(value), (double)series) < 2e-15,
+                    $"{value:R}");
                 seen++;
             }
         }
@@ -142,6 +144,7 @@ public class ElementaryTests
     }
 
     static void AssertUlps(double expected, double actual) =>
-        Assert.True(expected == actual || Math.Abs(BitConverter.DoubleToInt64Bits(expected) - BitConverter.DoubleToInt64Bits(actual)) <= 2,
+        Assert.True(expected == actual
+            || Math.Abs(BitConverter.DoubleToInt64Bits(expected) - BitConverter.DoubleToInt64Bits(actual)) <= 2,
             $"{actual:R} against {expected:R}");
 }

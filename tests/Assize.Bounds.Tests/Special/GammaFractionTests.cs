@@ -18,7 +18,8 @@ public class GammaFractionTests
     public void A_far_point_gives_the_asymptotic_series()
     {
         const double shape = 0.3, point = 1e4;
-        double series = 1 + (shape - 1) / point * (1 + (shape - 2) / point * (1 + (shape - 3) / point * (1 + (shape - 4) / point)));
+        double series = 1 + (shape - 1) / point
+            * (1 + (shape - 2) / point * (1 + (shape - 3) / point * (1 + (shape - 4) / point)));
 
         Assert.Equal(series, GammaFraction.Of(shape, point) * point, 1e-15);
     }

@@ -17,10 +17,12 @@ public class GaussLegendreTests
         }
     }
 
-    // M. Abramowitz and I. A. Stegun, Handbook of Mathematical Functions (1964), table 25.4, n = 2: points ±1/√3, weights 1.
+    // M. Abramowitz and I. A. Stegun, Handbook of Mathematical Functions (1964), table 25.4, n = 2: points ±1/√3,
+    // weights 1.
     [Fact]
     public void Two_points_are_the_handbooks() => Assert.Equal(
-        2 * Math.Exp(0.2) * Math.Cosh(1 / Math.Sqrt(3)), new GaussLegendre(2).Integrate(x => Math.Exp(x + 0.2), -1, 1), 1e-15);
+        2 * Math.Exp(0.2) * Math.Cosh(1 / Math.Sqrt(3)), new GaussLegendre(2).Integrate(x => Math.Exp(x + 0.2), -1, 1),
+            1e-15);
 
     [Fact]
     public void One_power_more_is_not_exact() =>

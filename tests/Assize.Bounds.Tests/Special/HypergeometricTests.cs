@@ -8,13 +8,16 @@ public class HypergeometricTests
     const double Accuracy = 5e-13;
 
     [Fact]
-    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses("hypergeometric_tail", Accuracy, 165, row =>
+    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "hypergeometric_tail", Accuracy, 165, row =>
     {
         var (population, marked) = (row.Whole("population"), row.Whole("marked"));
         var (drawn, successes) = (row.Whole("drawn"), row.Whole("k"));
         return Math.Max(
-            ReferenceTable.LogError(Hypergeometric.LogLowerTail(population, marked, drawn, successes), row.Number("ln_p_le")),
-            ReferenceTable.LogError(Hypergeometric.LogUpperTail(population, marked, drawn, successes), row.Number("ln_p_ge")));
+            ReferenceTable.LogError(
+                Hypergeometric.LogLowerTail(population, marked, drawn, successes), row.Number("ln_p_le")),
+            ReferenceTable.LogError(
+                Hypergeometric.LogUpperTail(population, marked, drawn, successes), row.Number("ln_p_ge")));
     }));
 
     [Fact]
@@ -53,7 +56,8 @@ public class HypergeometricTests
         if (ways.IsZero)
             Assert.Equal(double.NegativeInfinity, logarithm);
         else
-            Assert.True(ReferenceTable.RelativeError(Math.Exp(logarithm), (double)ways / (double)all) < 1e-13, $"{ways}/{all}: {logarithm:R}");
+            Assert.True(ReferenceTable.RelativeError(Math.Exp(logarithm), (double)ways / (double)all) < 1e-13,
+                $"{ways}/{all}: {logarithm:R}");
     }
 
     static BigInteger Choose(int n, int k)
@@ -79,7 +83,8 @@ public class HypergeometricTests
             long successes = (long)((double)marked * drawn / population) + random.Next(-30, 31);
             double one = Hypergeometric.LogUpperTail(population, marked, drawn, successes);
             double other = Hypergeometric.LogUpperTail(population, drawn, marked, successes);
-            Assert.True(ReferenceTable.LogError(one, other) <= 2 * Accuracy, $"{population} {marked} {drawn} {successes}: {one:R} {other:R}");
+            Assert.True(ReferenceTable.LogError(one, other) <= 2 * Accuracy,
+                $"{population} {marked} {drawn} {successes}: {one:R} {other:R}");
         }
     }
 
@@ -89,12 +94,16 @@ public class HypergeometricTests
         foreach (var (population, marked, drawn, name) in new[]
         {
             (0L, 0L, 0L, "population"), (2_000_000_001, 1, 1, "population"), (long.MaxValue, 1, 1, "population"),
-            (10, -1, 1, "marked"), (10, 11, 1, "marked"), (10, 1, -1, "drawn"), (10, 1, 11, "drawn"), (10, 1, long.MinValue, "drawn"),
+            (10, -1, 1, "marked"), (10, 11, 1, "marked"), (10, 1, -1, "drawn"), (10, 1, 11, "drawn"),
+                (10, 1, long.MinValue, "drawn"),
         })
         {
-            Assert.Throws<ArgumentOutOfRangeException>(name, () => Hypergeometric.LogMass(population, marked, drawn, 1));
-            Assert.Throws<ArgumentOutOfRangeException>(name, () => Hypergeometric.LogUpperTail(population, marked, drawn, 1));
-            Assert.Throws<ArgumentOutOfRangeException>(name, () => Hypergeometric.LogLowerTail(population, marked, drawn, 1));
+            Assert.Throws<ArgumentOutOfRangeException>(
+                name, () => Hypergeometric.LogMass(population, marked, drawn, 1));
+            Assert.Throws<ArgumentOutOfRangeException>(
+                name, () => Hypergeometric.LogUpperTail(population, marked, drawn, 1));
+            Assert.Throws<ArgumentOutOfRangeException>(
+                name, () => Hypergeometric.LogLowerTail(population, marked, drawn, 1));
         }
 
         foreach (long successes in new[] { long.MinValue, long.MaxValue })

@@ -5,7 +5,8 @@ public class IncompleteBetaTests
     // The documented accuracy.
     const double Accuracy = 5e-13;
 
-    static double LogLower(double a, double b, double x) => IncompleteBeta.LogLower(a, b, x, 1 - x, b * x - a * (1 - x));
+    static double LogLower(double a, double b, double x) =>
+        IncompleteBeta.LogLower(a, b, x, 1 - x, b * x - a * (1 - x));
 
     // I_x(k, n - k + 1) = P(S ≥ k): the table of binomial tails holds 80-digit values of it.
     [Fact]
@@ -52,7 +53,8 @@ public class IncompleteBetaTests
             if (reference < 1e-290)
                 continue;
 
-            Assert.True(ReferenceTable.RelativeError(Math.Exp(LogLower(a, b, x)), reference) < 4e-12, $"{a:R} {b:R} {x:R}");
+            Assert.True(ReferenceTable.RelativeError(Math.Exp(LogLower(a, b, x)), reference) < 4e-12,
+                $"{a:R} {b:R} {x:R}");
             seen++;
         }
 

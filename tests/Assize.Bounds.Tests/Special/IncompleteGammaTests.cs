@@ -6,7 +6,8 @@ public class IncompleteGammaTests
     const double Accuracy = 5e-13;
 
     [Fact]
-    public void Tails_agree_with_sixty_digits() => Assert.Empty(ReferenceTable.Misses("gamma_tail", Accuracy, GammaRows, row =>
+    public void Tails_agree_with_sixty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "gamma_tail", Accuracy, GammaRows, row =>
     {
         var (shape, point) = (row.Number("shape"), row.Number("x"));
         var (upper, lower) = (row.Number("ln_upper"), row.Number("ln_lower"));
@@ -16,7 +17,8 @@ public class IncompleteGammaTests
     }));
 
     [Fact]
-    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses("gamma_tail", 1e-12, GammaRows, row =>
+    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses(
+        "gamma_tail", 1e-12, GammaRows, row =>
     {
         var (shape, point) = (row.Number("shape"), row.Number("x"));
         var (upper, lower) = (row.Number("ln_upper"), row.Number("ln_lower"));
@@ -36,14 +38,17 @@ public class IncompleteGammaTests
         {
             double shape = Math.Exp(random.NextDouble() * Math.Log(100));
             double point = shape * Math.Exp(random.NextDouble() * 4 - 2);
-            AssertClose(MathNet.Numerics.SpecialFunctions.GammaUpperRegularized(shape, point), IncompleteGamma.UpperTail(shape, point), shape, point);
-            AssertClose(MathNet.Numerics.SpecialFunctions.GammaLowerRegularized(shape, point), IncompleteGamma.LowerTail(shape, point), shape, point);
+            AssertClose(MathNet.Numerics.SpecialFunctions.GammaUpperRegularized(shape, point),
+                IncompleteGamma.UpperTail(shape, point), shape, point);
+            AssertClose(MathNet.Numerics.SpecialFunctions.GammaLowerRegularized(shape, point),
+                IncompleteGamma.LowerTail(shape, point), shape, point);
         }
     }
 
     static void AssertClose(double reference, double computed, double shape, double point) => Assert.True(
         // Its small complements are 1 minus the other tail.
-        Math.Abs(reference - computed) <= 1e-12 * Math.Max(reference, 0.01), $"shape {shape:R}, point {point:R}: {computed:R} {reference:R}");
+        Math.Abs(reference - computed) <= 1e-12 * Math.Max(reference, 0.01),
+            $"shape {shape:R}, point {point:R}: {computed:R} {reference:R}");
 
     // Γ(a + 1) recurrence: Q(a + 1, x) - Q(a, x) = x^a e^-x / Γ(a + 1), the Poisson mass for whole a.
     [Fact]
@@ -82,8 +87,10 @@ public class IncompleteGammaTests
         foreach (double shape in new[] { 1e-10, 0.5, 1e12 })
         {
             Assert.Equal((1, 0), (IncompleteGamma.UpperTail(shape, 0), IncompleteGamma.LowerTail(shape, 0)));
-            Assert.Equal((0, 1), (IncompleteGamma.UpperTail(shape, double.PositiveInfinity), IncompleteGamma.LowerTail(shape, double.PositiveInfinity)));
-            Assert.Equal((0, double.NegativeInfinity), (IncompleteGamma.LogUpperTail(shape, 0), IncompleteGamma.LogLowerTail(shape, 0)));
+            Assert.Equal((0, 1), (IncompleteGamma.UpperTail(shape, double.PositiveInfinity),
+                IncompleteGamma.LowerTail(shape, double.PositiveInfinity)));
+            Assert.Equal((0, double.NegativeInfinity),
+                (IncompleteGamma.LogUpperTail(shape, 0), IncompleteGamma.LogLowerTail(shape, 0)));
             Assert.Equal(double.NegativeInfinity, IncompleteGamma.LogUpperTail(shape, double.PositiveInfinity));
             Assert.Equal(0, IncompleteGamma.LogLowerTail(shape, double.PositiveInfinity));
         }

@@ -25,9 +25,11 @@ public class KolmogorovWalkTests
         Assert.True(seen > 30, $"only {seen} rows within one half");
     }
 
-    // The table's own origin: K(10, 0.274) = 0.628479615…, G. Marsaglia, W. W. Tsang and J. Wang, J. Stat. Softw. 8 (2003), 18.
+    // The table's own origin: K(10, 0.274) = 0.628479615…, G. Marsaglia, W. W. Tsang and J. Wang, J. Stat. Softw. 8
+    // (2003), 18.
     [Fact]
-    public void It_agrees_with_the_printed_value() => Assert.Equal(0.6284796154565, 1 - KolmogorovWalk.Leaves(10, 2.74), 1e-12);
+    public void It_agrees_with_the_printed_value() =>
+        Assert.Equal(0.6284796154565, 1 - KolmogorovWalk.Leaves(10, 2.74), 1e-12);
 
     // P(D < 1/(2n) + t): below 1/(2n) no path stays; n! · (2d - 1/n)^n for d up to 1/n (Birnbaum 1952).
     [Theory]

@@ -6,7 +6,8 @@ public class PoissonTests
     const double Accuracy = 5e-13;
 
     [Fact]
-    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses("poisson_tail", Accuracy, 164, row =>
+    public void Tails_agree_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "poisson_tail", Accuracy, 164, row =>
     {
         var (mean, count) = (row.Number("lambda"), row.Whole("k"));
         return Math.Max(
@@ -15,7 +16,8 @@ public class PoissonTests
     }));
 
     [Fact]
-    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses("poisson_tail", 1e-12, 164, row =>
+    public void Tails_are_the_exponentials_of_their_logarithms() => Assert.Empty(ReferenceTable.Misses(
+        "poisson_tail", 1e-12, 164, row =>
     {
         var (mean, count) = (row.Number("lambda"), row.Whole("k"));
         var (lower, upper) = (row.Number("ln_p_le"), row.Number("ln_p_ge"));
@@ -46,7 +48,8 @@ public class PoissonTests
             int count = random.Next(0, (int)(3 * mean) + 5);
             double reference = MathNet.Numerics.Distributions.Poisson.PMFLn(mean, count);
             // Its terms are differences of numbers the size of count · ln(count).
-            Assert.Equal(reference, Poisson.LogMass(mean, count), 1e-14 * (10 + (count + mean) * (1 + Math.Log(1 + count + mean))));
+            Assert.Equal(reference, Poisson.LogMass(mean, count),
+                1e-14 * (10 + (count + mean) * (1 + Math.Log(1 + count + mean))));
         }
     }
 

@@ -13,6 +13,7 @@ public class SmallUpperTests
     public void Shape_one_half_gives_the_error_function()
     {
         for (double point = 0.25; point < 1; point += 0.01)
-            Assert.Equal(1, Math.Exp(SmallUpper.Log(0.5, point)) / MathNet.Numerics.SpecialFunctions.Erfc(Math.Sqrt(point)), 1e-13);
+            Assert.Equal(1, Math.Exp(SmallUpper.Log(0.5, point))
+                / MathNet.Numerics.SpecialFunctions.Erfc(Math.Sqrt(point)), 1e-13);
     }
 }

@@ -8,7 +8,8 @@ public class StudentTests
     const double Accuracy = 5e-13;
 
     [Fact]
-    public void The_tail_agrees_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses("student_t_tail", Accuracy, 212, row =>
+    public void The_tail_agrees_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "student_t_tail", Accuracy, 212, row =>
     {
         var (degrees, point) = (row.Number("df"), row.Number("t"));
         double truth = row.Number("ln_sf");
@@ -18,7 +19,8 @@ public class StudentTests
     }));
 
     [Fact]
-    public void The_quantile_agrees_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses("student_t_quantile", Accuracy, 99, row =>
+    public void The_quantile_agrees_with_eighty_digits() => Assert.Empty(ReferenceTable.Misses(
+        "student_t_quantile", Accuracy, 99, row =>
         ReferenceTable.RelativeError(Student.UpperQuantile(row.Number("df"), row.Number("upper_p")), row.Number("t"))));
 
     // Cauchy's law is Student's of one degree: P(T > t) = arctan(1/t)/π; that of two is ½ - t/(2√(2 + t²)).
@@ -46,7 +48,8 @@ public class StudentTests
             double point = Math.Exp(random.NextDouble() * 8 - 5);
             double reference = StudentT.CDF(0, 1, degrees, -point);
             if (reference > 1e-250)
-                Assert.True(ReferenceTable.RelativeError(Student.UpperTail(degrees, point), reference) < 1e-11, $"{degrees:R} {point:R}");
+                Assert.True(ReferenceTable.RelativeError(Student.UpperTail(degrees, point), reference) < 1e-11,
+                    $"{degrees:R} {point:R}");
         }
     }
 
