@@ -80,7 +80,7 @@ public class ElementaryTests
             foreach (double signed in new[] { x, -x })
             {
                 decimal exact = (decimal)signed;
-                decimal series = Series(exact * exact / 2, (term, n) => term * exact / (n + 2));
+                decimal series = Series(exact * exact / 2, (term, n) => term * exact / (n + 1));
                 double value = (double)exact;
                 Assert.True(ReferenceTable.RelativeError(Elementary.ExpExcess(value), (double)series) < 2e-15,
                     $"{value:R}");
