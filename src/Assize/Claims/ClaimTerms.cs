@@ -14,7 +14,7 @@ public static class ClaimTerms
     /// <exception cref="ClaimRefusedException">The risk lies outside its domain, or is NaN.</exception>
     public static TClaim WithRisk<TClaim>(this TClaim claim, double risk) where TClaim : Claim => risk is >= 1e-300 and < 1
         ? With(claim, terms => terms with { Risk = risk })
-        : throw Refused($"The risk must lie between 1e-300 and 1; it is {Wording.Number(risk)}. Usual is 1e-9.");
+        : throw Refused($"The risk must lie between 1e-300 and 1; it is {Wording.Exact(risk)}. Usual is 1e-9.");
 
     /// <summary>Sets how surely a defect must be caught.</summary>
     /// <typeparam name="TClaim">The type of the claim.</typeparam>
@@ -24,7 +24,7 @@ public static class ClaimTerms
     /// <exception cref="ClaimRefusedException">The confidence lies outside its domain, or is NaN.</exception>
     public static TClaim WithConfidence<TClaim>(this TClaim claim, double confidence) where TClaim : Claim => confidence is > 0 and < 1
         ? With(claim, terms => terms with { Confidence = confidence })
-        : throw Refused($"The confidence must lie between 0 and 1; it is {Wording.Number(confidence)}. Usual is 0.999.");
+        : throw Refused($"The confidence must lie between 0 and 1; it is {Wording.Exact(confidence)}. Usual is 0.999.");
 
     /// <summary>Runs exactly this many trials under the fixed plan; refused before the first when they are too few.</summary>
     /// <typeparam name="TClaim">The type of the claim.</typeparam>

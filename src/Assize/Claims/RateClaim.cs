@@ -48,25 +48,28 @@ public sealed record RateClaim : Claim<bool>
     /// <summary>The target, the edges of what is right and the defects, as they are judged.</summary>
     public Edges Edges { get; }
 
-    internal override string Sentence => $"rate {Wording.Target(Edges, Target, Tolerance, Defect)}";
+    internal override string Sentence => Wording.Rate(Edges, Tolerance);
 
     /// <inheritdoc/>
-    public override Plan Plan() => new(RatePlan.For(Edges, Risk, Confidence), RateStakes.For(Edges, Risk, Confidence));
+    public override Plan Plan() => new(Stakes());
 
     private protected override IRace<bool> Start()
     {
-        if (Terms.Trials is { } trials)
-            return new FixedRate(Edges, LimitsAt(trials), Confidence);
+        if (Terms.Trials is not { } trials)
+            return new RateRace(Stakes(), Terms.TrialCap);
 
-        return new RateRace(RateStakes.For(Edges, Risk, Confidence), Confidence, Terms.TrialCap);
-    }
+        if (Terms.TrialCap < trials)
+            throw new ClaimRefusedException($"WithTrials({Wording.Literal(trials)}) cannot finish below "
+                + $"WithTrialCap({Wording.Literal(Terms.TrialCap.Value)}): leave one of them out.");
 
-    RateLimits LimitsAt(long trials)
-    {
         var plan = RatePlan.For(Edges, Risk, Confidence);
-        return trials >= plan.Trials
-            ? plan.LimitsAt(trials)
-            : throw new ClaimRefusedException($"WithTrials({trials}) is too few: {Sentence} at risk {Wording.Number(Risk)} and confidence "
-                + $"{Wording.Number(Confidence)} takes {plan.Trials} trials. Allow {plan.Trials}, or leave WithTrials out: the race mostly needs fewer.");
+        return trials >= plan.Trials ? new FixedRate(plan, plan.LimitsAt(trials)) : throw TooFew(trials, plan.Trials);
     }
+
+    RateStakes Stakes() => RateStakes.Of(RatePlan.For(Edges, Risk, Confidence));
+
+    ClaimRefusedException TooFew(long trials, long needed) => new(
+        $"WithTrials({Wording.Literal(trials)}) is too few: {Sentence}, at risk {Wording.Number(Risk)} and confidence "
+        + $"{Wording.Number(Confidence)}, takes {Wording.Number(needed)} trials. Write WithTrials({Wording.Literal(needed)}), "
+        + "or leave it out: the race mostly needs fewer.");
 }

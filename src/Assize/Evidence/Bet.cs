@@ -2,140 +2,136 @@ using Assize.Bounds;
 
 namespace Assize;
 
-/// <summary>A weighted average of likelihood ratios between rates: the wealth of somebody who bets on each of them.</summary>
+/// <summary>A weighted average of likelihood ratios between rates: the wealth of somebody who bets on each of
+/// them.</summary>
 /// <remarks>
-/// LR(q : p) = (q/p)^s ((1-q)/(1-p))^(n-s). With q above p it is a nonnegative supermartingale for every rate up to p, since its
-/// one-step mean is linear in the rate, increasing, and 1 at p; with q below p likewise for every rate from p up. So is an average.
-/// Wealth is taken from the counts, never accumulated.
+/// LR(q : p) = (q/p)^s ((1-q)/(1-p))^(n-s). With q above p it is a nonnegative supermartingale for every rate up to p,
+/// since its one-step mean is linear in the rate, increasing, and 1 at p; with q below p likewise for every rate from p
+/// up. So is an average. Wealth is taken from the counts, never accumulated.
 /// </remarks>
 sealed class Bet
 {
     // 2^-53, the rounding of one operation.
     const double Unit = 1.1102230246251565e-16;
+    const double LogTwo = 0.693147180559945309417;
 
     readonly (double LogWeight, double OnSuccess, double OnFailure)[] _terms;
 
     Bet((double, double, double)[] terms) => _terms = terms;
 
-    /// <summary>Bets on rates from the target away by the defect, twice, four times it …, and on the rim of the domain.</summary>
+    /// <summary>Bets on rates away from the target by the defect, twice, four times it …, and on the rim of the
+    /// domain.</summary>
     public static Bet AgainstClaim(double target, double edge, double? defect, double rim)
     {
         var rates = new List<double>();
-        if (defect is { } first)
+        double distance = (defect ?? rim) - target;
+        for (double rate = target + distance; Math.Abs(rate - target) < Math.Abs(rim - target); rate = target + distance)
         {
-            double distance = first - target;
-            for (double rate = first; Math.Abs(rate - target) < Math.Abs(rim - target) && rates.Count < 64; distance *= 2, rate = target + distance)
-                rates.Add(rate);
+            rates.Add(rates.Count == 0 ? defect!.Value : rate);
+            distance *= 2;
         }
 
         rates.Add(rim);
-        // Half of the money on the smallest defect, the rest shared: gross defects are caught at once for a few percent more there.
+        // Half of the money on the smallest defect, the rest shared: gross defects are caught at once, for little there.
         return new Bet([.. rates.Select((rate, k) => Term(
             rates.Count == 1 ? 1 : k == 0 ? 0.5 : 0.5 / (rates.Count - 1), rate, edge))]);
     }
 
-    /// <summary>Bets that the rate is right, half on the target and half on the edge nearest to the defect.</summary>
-    public static Bet AgainstDefect(double target, double edge, double defect, double targetShare = 0.5) => target == edge
+    /// <summary>Bets that the rate is right: a share on the target, the rest on the edge nearest to the
+    /// defect.</summary>
+    public static Bet AgainstDefect(double target, double edge, double defect, double targetShare) => target == edge
         ? new Bet([Term(1, target, defect)])
         : new Bet([Term(targetShare, target, defect), Term(1 - targetShare, edge, defect)]);
 
-    /// <summary>The logarithm of the wealth.</summary>
-    public double Log(long trials, long successes) => LogSum(trials, successes, out _);
-
-    /// <summary>What the logarithm of the wealth surely is at least, whatever rounding did.</summary>
-    public double LogAtLeast(long trials, long successes)
-    {
-        double log = LogSum(trials, successes, out double size);
-        return log - Slack(size);
-    }
-
-    /// <summary>The same for the even average of two bets; either may be absent.</summary>
-    public static double LogAtLeast(Bet? one, Bet? other, long trials, long successes)
+    /// <summary>The even average of two bets, either of which may be absent.</summary>
+    public static LogWealth Average(Bet? one, Bet? other, long trials, long successes)
     {
         if (one is null || other is null)
-            return (one ?? other)!.LogAtLeast(trials, successes);
+            return (one ?? other)!.Wealth(trials, successes);
 
-        double first = one.LogSum(trials, successes, out double firstSize);
-        double second = other.LogSum(trials, successes, out double secondSize);
-        return LogAverage(first, second) - Slack(Math.Max(firstSize, secondSize));
-    }
-
-    /// <summary>The logarithm of the even average of two bets; either may be absent.</summary>
-    public static double Log(Bet? one, Bet? other, long trials, long successes) => one is null || other is null
-        ? (one ?? other)!.Log(trials, successes)
-        : LogAverage(one.Log(trials, successes), other.Log(trials, successes));
-
-    /// <summary>The least number of successes with such a wealth, for a bet that gains by them; trials + 1 if there is none.</summary>
-    public long LeastSuccesses(long trials, double log, long? guess = null) =>
-        First(trials, guess ?? trials / 2, successes => Log(trials, successes) >= log);
-
-    /// <summary>The greatest number of successes with such a wealth, for a bet that loses by them; -1 if there is none.</summary>
-    public long GreatestSuccesses(long trials, double log, long? guess = null) =>
-        First(trials, guess ?? trials / 2, successes => Log(trials, successes) < log) - 1;
-
-    // The first count in [0, trials] where a condition that stays true once it is true holds, looked for outwards from a guess.
-    static long First(long trials, long guess, Func<long, bool> holds)
-    {
-        long low = -1, high = trials + 1, stride = 1;
-        for (long probe = Math.Clamp(guess, 0, trials); low + 1 < high; stride *= 4)
-        {
-            if (holds(probe))
-                high = probe;
-            else
-                low = probe;
-            probe = low < 0 && high > stride ? high - stride
-                : high > trials && low + stride <= trials ? low + stride
-                : low + (high - low) / 2;
-        }
-
-        return high;
-    }
-
-    static double Slack(double size) => double.IsInfinity(size) ? 0 : 8 * Unit * size + 1e-14;
-
-    static double LogAverage(double first, double second)
-    {
-        double greater = Math.Max(first, second);
-        return double.IsInfinity(greater)
+        var (first, second) = (one.Wealth(trials, successes), other.Wealth(trials, successes));
+        double greater = Math.Max(first.Value, second.Value);
+        double lesser = Math.Min(first.Value, second.Value);
+        double log = double.IsInfinity(greater)
             ? greater
-            : greater + Elementary.LogOnePlus(Elementary.Exp(Math.Min(first, second) - greater)) - LogTwo;
+            : greater + Elementary.LogOnePlus(Elementary.Exp(lesser - greater)) - LogTwo;
+        return new LogWealth(log, Math.Max(first.Error, second.Error));
     }
 
-    const double LogTwo = 0.693147180559945309417;
-
-    double LogSum(long trials, long successes, out double size)
+    /// <summary>The wealth after so many trials and successes.</summary>
+    public LogWealth Wealth(long trials, long successes)
     {
-        double greatest = double.NegativeInfinity;
-        size = 0;
         Span<double> logs = stackalloc double[_terms.Length];
+        double greatest = double.NegativeInfinity;
+        double size = 0;
         for (int k = 0; k < _terms.Length; k++)
         {
             var (weight, onSuccess, onFailure) = _terms[k];
             double won = Times(successes, onSuccess), lost = Times(trials - successes, onFailure);
             // Ruin wins over riches inside one term: infinity is never taken from infinity.
-            logs[k] = double.IsNegativeInfinity(won) || double.IsNegativeInfinity(lost) ? double.NegativeInfinity : weight + won + lost;
+            logs[k] = double.IsNegativeInfinity(won) || double.IsNegativeInfinity(lost)
+                ? double.NegativeInfinity
+                : weight + won + lost;
             greatest = Math.Max(greatest, logs[k]);
             if (double.IsFinite(logs[k]))
                 size = Math.Max(size, Math.Abs(won) + Math.Abs(lost));
         }
 
-        if (double.IsInfinity(greatest))
-            return greatest;
+        // Each coefficient is within 5 units, product and sum add 2; the logarithm of the sum is within 1e-14.
+        double error = 8 * Unit * size + 1e-14;
+        return new LogWealth(double.IsInfinity(greatest) ? greatest : greatest + LogSum(logs, greatest), error);
+    }
+
+    /// <summary>The least number of successes that may have such a wealth, for a bet that gains by them; trials + 1 if
+    /// none. Quick when the guess is near.</summary>
+    public long LeastSuccesses(long trials, double log, long guess) =>
+        First(trials, guess, successes => Wealth(trials, successes).AtMost >= log);
+
+    /// <summary>The greatest number of successes that may have such a wealth, for a bet that loses by them; -1 if
+    /// none.</summary>
+    public long GreatestSuccesses(long trials, double log, long guess) =>
+        First(trials, guess + 1, successes => Wealth(trials, successes).AtMost < log) - 1;
+
+    // The first number in [0, trials] where the condition holds, or trials + 1: strides that double, then halves.
+    static long First(long trials, long guess, Func<long, bool> holds)
+    {
+        long low = -1, high = trials + 1;
+        long probe = Math.Clamp(guess, 0, trials);
+        for (long stride = 1; low + 1 < high; stride *= 2)
+        {
+            if (holds(probe))
+                high = probe;
+            else
+                low = probe;
+
+            bool isBracketed = low >= 0 && high <= trials;
+            probe = isBracketed ? low + (high - low) / 2
+                : high <= trials ? Math.Max(0, high - stride)
+                : Math.Min(trials, low + stride);
+        }
+
+        return high;
+    }
+
+    static double LogSum(ReadOnlySpan<double> logs, double greatest)
+    {
+        if (logs.Length == 1)
+            return 0;
 
         double sum = 0;
         foreach (double log in logs)
             sum += Elementary.Exp(log - greatest);
-        return greatest + Elementary.Log(sum);
+        return Elementary.Log(sum);
     }
 
     static double Times(long count, double log) => count == 0 ? 0 : count * log;
 
-    static (double, double, double) Term(double weight, double rate, double against) =>
-        (Elementary.Log(weight), LogRatio(rate, against), LogRatio(1 - rate, 1 - against, against - rate));
+    static (double, double, double) Term(double weight, double rate, double against) => (
+        Elementary.Log(weight),
+        LogRatio(rate, against, rate - against),
+        LogRatio(1 - rate, 1 - against, against - rate));
 
-    static double LogRatio(double rate, double against) => LogRatio(rate, against, rate - against);
-
-    // ln(rate / against) from their difference, which is exact where the logarithm alone would cancel.
+    // ln(rate / against), from their difference where they are near: there the logarithm of the quotient would cancel.
     static double LogRatio(double rate, double against, double difference)
     {
         if (rate == 0)
@@ -143,6 +139,8 @@ sealed class Bet
         if (against == 0)
             return double.PositiveInfinity;
 
-        return Math.Abs(difference) < against / 2 ? Elementary.LogOnePlus(difference / against) : Elementary.Log(rate) - Elementary.Log(against);
+        return Math.Abs(difference) < against / 2
+            ? Elementary.LogOnePlus(difference / against)
+            : Elementary.Log(rate / against);
     }
 }

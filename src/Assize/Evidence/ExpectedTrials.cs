@@ -1,7 +1,8 @@
 namespace Assize;
 
-/// <summary>About how many trials a race takes, by what is true. Estimates for people: no verdict rests on them.</summary>
-/// <remarks>Exact for races of up to 4,000 trials; beyond, a walk of coarser steps with the same mean and variance, within 2 %.</remarks>
+/// <summary>About how many trials a race takes, by what is true. Estimates for people: no verdict rests on
+/// them.</summary>
+/// <remarks>Exact for short races; for longer ones a walk in coarser steps of the same mean and variance.</remarks>
 public sealed record ExpectedTrials
 {
     ExpectedTrials(double atTarget, double atTolerance, double atDefect) =>
@@ -16,18 +17,23 @@ public sealed record ExpectedTrials
     /// <summary>When the truth is at the defect; the longer one of two.</summary>
     public double AtDefect { get; }
 
-    internal static ExpectedTrials Of(Bounds.Edges edges, RateStakes stakes)
+    internal static ExpectedTrials Of(RateStakes stakes)
     {
-        double At(params ReadOnlySpan<double?> truths)
+        var table = new TriggerTable(stakes);
+        var known = new Dictionary<double, double>();
+        double At(double? truth)
         {
-            double longest = 0;
-            foreach (double? truth in truths)
-                longest = Math.Max(longest, truth is { } rate ? new RaceWalk(stakes, rate).Mean() : 0);
-            return longest;
+            if (truth is not { } rate)
+                return 0;
+            if (!known.TryGetValue(rate, out double trials))
+                known[rate] = trials = RaceWalk.MeanTrials(table, rate);
+            return trials;
         }
 
-        double atTarget = At(edges.Target);
-        bool exact = (edges.UpperEdge ?? edges.Target) == edges.Target && (edges.LowerEdge ?? edges.Target) == edges.Target;
-        return new(atTarget, exact ? atTarget : At(edges.LowerEdge, edges.UpperEdge), At(edges.LowerDefect, edges.UpperDefect));
+        var edges = stakes.Plan.Edges;
+        return new ExpectedTrials(
+            At(edges.Target),
+            Math.Max(At(edges.LowerEdge), At(edges.UpperEdge)),
+            Math.Max(At(edges.LowerDefect), At(edges.UpperDefect)));
     }
 }

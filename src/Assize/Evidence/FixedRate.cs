@@ -3,21 +3,28 @@ using Assize.Bounds;
 namespace Assize;
 
 /// <summary>The fixed plan: so many trials, then the count decides.</summary>
-sealed class FixedRate(Edges edges, RateLimits limits, double confidence) : IRace<bool>
+sealed class FixedRate(RatePlan plan, RateLimits limits) : IRace<bool>
 {
     long _trials;
     long _successes;
 
-    public Outcome? Outcome =>
-        _trials < limits.Trials ? null : limits.Accept(_successes) ? Assize.Outcome.Upheld : Assize.Outcome.Refuted;
+    public Outcome? Outcome => _trials < limits.Trials ? null
+        : limits.Accept(_successes) ? Assize.Outcome.Upheld
+        : Assize.Outcome.Refuted;
 
-    public void Add(bool draw)
+    public void Add(bool draw) => Add([draw]);
+
+    public void Add(ReadOnlySpan<bool> draws)
     {
-        _trials++;
-        if (draw)
-            _successes++;
+        var wanted = draws[..(int)Math.Min(draws.Length, limits.Trials - _trials)];
+        _trials += wanted.Length;
+        _successes += wanted.Count(true);
     }
 
-    public RaceReport Report() =>
-        RateReport.Of(new RateBets(edges), _trials, _successes, confidence, "exact binomial", limits.Trials);
+    public RaceReport Report()
+    {
+        var bets = new RateBets(plan.Edges);
+        var report = RateReport.Of(plan, bets, _trials, _successes, plan.Theorem, limits.Trials);
+        return Outcome is null ? report : report with { Accepts = (limits.AcceptLow, limits.AcceptHigh) };
+    }
 }

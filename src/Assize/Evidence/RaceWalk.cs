@@ -2,84 +2,96 @@ using Assize.Bounds;
 
 namespace Assize;
 
-/// <summary>The distribution of a race's length by carrying forward where the count of successes may be.</summary>
+/// <summary>The mean length of a race, by carrying forward where the count of successes may be.</summary>
 /// <remarks>
-/// Steps of several trials move the count by a three-point law of the same mean and variance, or by the binomial itself where
-/// successes are rare; limits are drawn in by half a grid step, the mean overshoot of such a walk.
+/// A step of several trials moves the count by the binomial itself where its spread is small, else by a three-point law
+/// of the same mean and variance; limits are then drawn in by half a place, the mean overshoot on such a grid.
 /// </remarks>
 sealed class RaceWalk
 {
-    const int Steps = 4_000;
+    const long CoarseSteps = 2_000;
+    const long FineSteps = 1_000;
     const double Negligible = 1e-9;
+    const double WideVariance = 4;
 
+    readonly TriggerTable _table;
     readonly RateStakes _stakes;
     readonly double _rate;
     readonly long _stride;
-    readonly double _grid;
+    readonly double _grid = 1;
     readonly double[] _moves;
-    Triggers? _limits;
+    readonly WalkLayer _neither;
+    readonly WalkLayer _notAbove;
+    readonly WalkLayer _notBelow;
 
-    public RaceWalk(RateStakes stakes, double rate)
+    RaceWalk(TriggerTable table, double rate, long stride)
     {
-        (_stakes, _rate) = (stakes, rate);
-        _stride = Math.Max(1, (stakes.Trials + Steps - 1) / Steps);
-        double variance = _stride * rate * (1 - rate);
-        bool coarse = variance > 4;
-        _grid = coarse ? Math.Sqrt(3 * variance) : 1;
-        _moves = coarse ? [1.0 / 6, 2.0 / 3, 1.0 / 6] : Binomials();
+        (_table, _stakes, _rate, _stride) = (table, table.Stakes, rate, stride);
+        double variance = stride * rate * (1 - rate);
+        bool isWide = variance > WideVariance;
+        if (isWide)
+            _grid = Math.Sqrt(3 * variance);
+        _moves = isWide ? [1.0 / 6, 2.0 / 3, 1.0 / 6] : Binomials();
+        var (above, below) = (_stakes.Bets.DefectAbove, _stakes.Bets.DefectBelow);
+        _notAbove = new WalkLayer(above is null ? 1 : 0);
+        _notBelow = new WalkLayer(above is not null && below is null ? 1 : 0);
+        _neither = new WalkLayer(above is not null && below is not null ? 1 : 0);
     }
 
-    bool IsCoarse => _grid > 1;
+    bool IsWide => _grid > 1;
 
-    /// <summary>The mean number of trials until the verdict.</summary>
-    public double Mean()
+    /// <summary>The mean number of trials until the verdict: a coarse walk tells how fine the second must
+    /// be.</summary>
+    public static double MeanTrials(TriggerTable table, double rate)
     {
-        // One array for each of: neither defect excluded, the one above, the one below.
-        bool none = _stakes.Bets.DefectAbove is not null && _stakes.Bets.DefectBelow is not null;
-        var both = new WalkLayer(none ? 1 : 0);
-        var notAbove = new WalkLayer(!none && _stakes.Bets.DefectAbove is null ? 1 : 0);
-        var notBelow = new WalkLayer(!none && _stakes.Bets.DefectAbove is not null ? 1 : 0);
+        long coarse = Math.Max(1, table.Stakes.Trials / CoarseSteps);
+        double mean = new RaceWalk(table, rate, coarse).Mean();
+        long fine = Math.Max(1, (long)(mean / FineSteps));
+        return fine < coarse ? new RaceWalk(table, rate, fine).Mean() : mean;
+    }
+
+    double Mean()
+    {
         double mean = 0;
         for (long trials = 0; trials < _stakes.Trials;)
         {
-            double alive = both.Mass + notAbove.Mass + notBelow.Mass;
+            double alive = _neither.Mass + _notAbove.Mass + _notBelow.Mass;
             if (alive < Negligible)
                 break;
 
             long step = Math.Min(_stride, _stakes.Trials - trials);
             mean += alive * step;
             trials += step;
-            both.Move(_moves, IsCoarse);
-            notAbove.Move(_moves, IsCoarse);
-            notBelow.Move(_moves, IsCoarse);
-            Judge(trials, both, notAbove, notBelow);
+            foreach (var layer in (ReadOnlySpan<WalkLayer>)[_neither, _notAbove, _notBelow])
+                layer.Move(_moves, IsWide ? -1 : 0);
+            Judge(trials, _table.At(trials));
         }
 
         return mean;
     }
 
-    void Judge(long trials, WalkLayer both, WalkLayer notAbove, WalkLayer notBelow)
+    void Judge(long trials, Triggers triggers)
     {
-        var limits = _limits = _stakes.Close(trials, _limits);
-        int redFrom = FromBelow(trials, limits.RedFrom), redTo = FromAbove(trials, limits.RedTo);
-        foreach (var layer in (WalkLayer[])[both, notAbove, notBelow])
+        int redFrom = Reaching(trials, triggers.RedFrom);
+        int redTo = Falling(trials, triggers.RedTo);
+        foreach (var layer in (ReadOnlySpan<WalkLayer>)[_neither, _notAbove, _notBelow])
             layer.Drop(redFrom, redTo);
 
-        int aboveTo = _stakes.Bets.DefectAbove is null ? int.MaxValue : FromAbove(trials, limits.NotAboveTo);
-        int belowFrom = _stakes.Bets.DefectBelow is null ? int.MinValue : FromBelow(trials, limits.NotBelowFrom);
-        both.MoveTo(notAbove, upTo: aboveTo);
-        both.MoveTo(notBelow, from: belowFrom);
-        notAbove.Drop(belowFrom, int.MinValue);
-        notBelow.Drop(int.MaxValue, aboveTo);
+        int aboveTo = Falling(trials, triggers.NotAboveTo);
+        int belowFrom = Reaching(trials, triggers.NotBelowFrom);
+        _neither.MoveTo(_notAbove, int.MaxValue, aboveTo);
+        _neither.MoveTo(_notBelow, belowFrom, int.MinValue);
+        _notAbove.Drop(belowFrom, int.MinValue);
+        _notBelow.Drop(int.MaxValue, aboveTo);
     }
 
     // The place on the grid of a limit that is reached from below, or from above.
-    int FromBelow(long trials, long successes) => (int)Math.Clamp(Math.Ceiling(Place(trials, successes, -0.5)), -1e9, 1e9);
+    int Reaching(long trials, long successes) => (int)Math.Clamp(Math.Ceiling(Place(trials, successes, -0.5)), -1e9, 1e9);
 
-    int FromAbove(long trials, long successes) => (int)Math.Clamp(Math.Floor(Place(trials, successes, 0.5)), -1e9, 1e9);
+    int Falling(long trials, long successes) => (int)Math.Clamp(Math.Floor(Place(trials, successes, 0.5)), -1e9, 1e9);
 
     double Place(long trials, long successes, double drawnIn) =>
-        IsCoarse ? (successes - trials * _rate) / _grid + drawnIn : successes;
+        IsWide ? (successes - trials * _rate) / _grid + drawnIn : successes;
 
     double[] Binomials()
     {
@@ -87,7 +99,7 @@ sealed class RaceWalk
         for (long k = 0; k <= _stride; k++)
         {
             double mass = Binomial.Mass(_stride, k, _rate);
-            if (k > _stride * _rate && mass < Negligible / Steps)
+            if (k > _stride * _rate && mass < Negligible / 1000)
                 break;
 
             moves.Add(mass);

@@ -5,7 +5,8 @@ namespace Assize;
 /// <summary>The bets of a race about a rate; a bet on a side that does not exist is null.</summary>
 sealed class RateBets
 {
-    /// <summary>The bets for a claim; the share is what is staked on the target rather than the edge against a defect.</summary>
+    /// <summary>The bets for a claim; the share is what a bet against a defect puts on the target rather than the
+    /// edge.</summary>
     public RateBets(Edges edges, double targetShare = 0.5)
     {
         double target = edges.Target;

@@ -1,36 +1,41 @@
 namespace Assize;
 
-/// <summary>Three bets beside the trials of a rate: one against the claim, one against a defect above, one against a defect below.</summary>
+/// <summary>Three bets beside the trials of a rate: one against the claim, one against a defect above, one against a
+/// defect below.</summary>
 /// <remarks>
-/// Ville's inequality bounds the chance that a nonnegative supermartingale starting at 1 ever reaches 1/q by q, whenever one looks.
-/// The verdict is that of the first trial at which one stands; it does not depend on how trials are grouped into blocks.
+/// Ville's inequality bounds the chance that a nonnegative supermartingale starting at 1 ever reaches 1/q by q, whenever
+/// one looks. The verdict is that of the first trial at which one stands; it does not depend on how trials are grouped.
 /// </remarks>
 sealed class RateRace : IRace<bool>
 {
+    const long ShortStretch = 64;
+    const string Theorem = "likelihood-ratio bets, Ville's inequality";
+
     readonly RateStakes _stakes;
-    readonly double _confidence;
     readonly long _cap;
-    readonly bool _mayDecideAtCap;
     bool _notAbove;
     bool _notBelow;
     bool _decidedAtCap;
     long _trials;
     long _successes;
+    long _nextLook;
     long _stretchEnd;
-    long _redFrom;
-    long _redTo;
-    long _greenTo;
-    long _greenFrom;
+    long _stretchLength = ShortStretch;
+    Triggers _triggers;
+    Chord _redFrom;
+    Chord _redTo;
+    Chord _notAboveTo;
+    Chord _notBelowFrom;
 
     /// <summary>A race before its first trial; an author's cap below the plan's own ends it undecided.</summary>
-    public RateRace(RateStakes stakes, double confidence, long? authorCap)
+    public RateRace(RateStakes stakes, long? authorCap = null)
     {
-        (_stakes, _confidence) = (stakes, confidence);
+        _stakes = stakes;
         _cap = Math.Min(stakes.Trials, authorCap ?? long.MaxValue);
-        _mayDecideAtCap = _cap == stakes.Trials;
         _notAbove = stakes.Bets.DefectAbove is null;
         _notBelow = stakes.Bets.DefectBelow is null;
         Stretch();
+        _nextLook = NextLook();
     }
 
     public Outcome? Outcome { get; private set; }
@@ -39,52 +44,94 @@ sealed class RateRace : IRace<bool>
     {
         if (draw)
             _successes++;
-        if (++_trials >= _stretchEnd)
-            Stretch();
-        if (_successes >= _redFrom || _successes <= _redTo || _successes <= _greenTo || _successes >= _greenFrom)
-            Outcome = Test();
-        if (_trials == _cap && Outcome is null)
-            AtCap();
+        if (++_trials == _nextLook)
+            Look();
     }
 
-    public RaceReport Report() => RateReport.Of(
-        _stakes.Bets, _trials, _successes, _confidence, _decidedAtCap ? "exact binomial" : "likelihood-ratio bets, Ville's inequality", _cap);
+    // Before the next look no count can reach a trigger, in whatever order the draws come: counting them is enough.
+    public void Add(ReadOnlySpan<bool> draws)
+    {
+        while (!draws.IsEmpty && Outcome is null)
+        {
+            int quiet = (int)Math.Min(draws.Length, _nextLook - _trials);
+            _successes += draws[..quiet].Count(true);
+            _trials += quiet;
+            draws = draws[quiet..];
+            if (_trials == _nextLook)
+                Look();
+        }
+    }
 
-    // The exact test, in the order that decides between verdicts that come true together.
-    Outcome? Test()
+    public RaceReport Report()
+    {
+        var (plan, limits) = (_stakes.Plan, _stakes.Limits);
+        string theorem = _decidedAtCap ? plan.Theorem : Theorem;
+        var report = RateReport.Of(plan, _stakes.Bets, _trials, _successes, theorem, _cap);
+        return _decidedAtCap ? report with { Accepts = (limits.AcceptLow, limits.AcceptHigh) } : report;
+    }
+
+    void Look()
+    {
+        if (Steps() == 0)
+            Test();
+        if (Outcome is null && _trials == _cap)
+            AtCap();
+        if (Outcome is null)
+            _nextLook = NextLook();
+    }
+
+    long NextLook()
+    {
+        if (_trials == _stretchEnd)
+            Stretch();
+        return _trials + Math.Clamp(Steps(), 1, _stretchEnd - _trials);
+    }
+
+    long Steps() => Math.Min(
+        Math.Min(_redFrom.Steps(_trials, _successes), _redTo.Steps(_trials, _successes)),
+        Math.Min(_notAboveTo.Steps(_trials, _successes), _notBelowFrom.Steps(_trials, _successes)));
+
+    // The exact test, in the order that decides between verdicts that come true together. Flags stick.
+    void Test()
     {
         if (_stakes.Refutes(_trials, _successes))
-            return Assize.Outcome.Refuted;
+        {
+            Outcome = Assize.Outcome.Refuted;
+            return;
+        }
 
         bool notAbove = _notAbove || _stakes.ExcludesAbove(_trials, _successes);
         bool notBelow = _notBelow || _stakes.ExcludesBelow(_trials, _successes);
         if (notAbove && notBelow)
-            return Assize.Outcome.Upheld;
-        if (notAbove == _notAbove && notBelow == _notBelow)
-            return null;
-
-        (_notAbove, _notBelow) = (notAbove, notBelow);
-        Stretch();
-        return null;
+            Outcome = Assize.Outcome.Upheld;
+        else if (notAbove != _notAbove || notBelow != _notBelow)
+            (_notAbove, _notBelow, _stretchEnd) = (notAbove, notBelow, _trials);
+        else if (_stretchEnd - _trials > ShortStretch)
+            // The chord was too far from its curve: shorter ones lie closer.
+            (_stretchLength, _stretchEnd) = (ShortStretch / 2, _trials);
     }
 
-    // P(red) ≤ P(race red) + P(limits reject) ≤ 0.9 risk + 0.1 risk, and likewise green: the limits see every draw, unconditionally.
+    // P(red) ≤ P(race red) + P(limits reject) ≤ 0.9 risk + 0.1 risk, and likewise green: the limits see every draw.
     void AtCap()
     {
-        _decidedAtCap = _mayDecideAtCap;
-        Outcome = !_mayDecideAtCap ? Assize.Outcome.Undecided
-            : _stakes.Limits.Accept(_successes) ? Assize.Outcome.Upheld : Assize.Outcome.Refuted;
+        _decidedAtCap = _cap == _stakes.Trials;
+        Outcome = !_decidedAtCap ? Assize.Outcome.Undecided
+            : _stakes.Limits.Accept(_successes) ? Assize.Outcome.Upheld
+            : Assize.Outcome.Refuted;
     }
 
-    // Each limit only grows with the trials, so those that matter for a stretch are the least and greatest at its ends.
     void Stretch()
     {
-        long first = Math.Max(1, _trials);
-        long last = first + Math.Clamp(first / 8, 16, 8192);
-        _stretchEnd = last + 1;
-        var (atFirst, atLast) = (_stakes.Loose(first), _stakes.Loose(last));
-        (_redFrom, _redTo) = (atFirst.RedFrom, atLast.RedTo);
-        _greenTo = _notAbove ? -1 : atLast.NotAboveTo;
-        _greenFrom = _notBelow ? long.MaxValue : atFirst.NotBelowFrom;
+        long first = _trials;
+        _stretchLength = Math.Min(2 * _stretchLength, Math.Max(ShortStretch, first));
+        long last = Math.Min(first + _stretchLength, _cap);
+        _stretchEnd = last;
+        var start = _stakes.TriggersAt(first, _triggers);
+        var end = _stakes.TriggersAt(last, start);
+        _triggers = end;
+        _redFrom = Chord.Upper(first, last, start.RedFrom, end.RedFrom);
+        _redTo = Chord.Lower(first, last, start.RedTo, end.RedTo);
+        _notAboveTo = _notAbove ? default : Chord.Lower(first, last, start.NotAboveTo, end.NotAboveTo);
+        _notBelowFrom = _notBelow ? default : Chord.Upper(first, last, start.NotBelowFrom, end.NotBelowFrom);
     }
 }

@@ -1,20 +1,22 @@
 namespace Assize;
 
-/// <summary>How much of a walk is at each place, still alive.</summary>
+/// <summary>How much of a walk is at each place of its grid.</summary>
 sealed class WalkLayer
 {
     const double Negligible = 1e-15;
+    const int Spare = 64;
 
-    // The places from _low to _high, from the start of the array on; the other array takes the next move.
-    double[] _mass = new double[64];
-    double[] _moved = new double[64];
+    double[] _mass = new double[Spare];
+    double[] _moved = new double[Spare];
+    int _least = -Spare / 2;
     int _low;
     int _high = -1;
 
     public WalkLayer(double mass)
     {
+        _mass[-_least] = mass;
         if (mass > 0)
-            (_mass[0], _high) = (mass, 0);
+            _high = 0;
     }
 
     public double Mass
@@ -22,75 +24,74 @@ sealed class WalkLayer
         get
         {
             double sum = 0;
-            for (int i = 0; i <= _high - _low; i++)
-                sum += _mass[i];
+            for (int place = _low; place <= _high; place++)
+                sum += _mass[place - _least];
             return sum;
         }
     }
 
-    /// <summary>Spreads every place over its neighbours: around it, or from it upwards.</summary>
-    public void Move(double[] moves, bool centred)
+    /// <summary>Spreads every place by the moves, the first of which goes so far.</summary>
+    public void Move(ReadOnlySpan<double> moves, int first)
     {
         if (_high < _low)
             return;
 
-        int width = _high - _low + 1;
-        int wider = width + moves.Length - 1;
-        if (_moved.Length < wider)
-            _moved = new double[2 * wider];
-        Array.Clear(_moved, 0, wider);
-        for (int i = 0; i < width; i++)
+        Reserve(_low + first, _high + first + moves.Length - 1);
+        var (from, to) = (_mass, _moved);
+        Array.Clear(to, _low + first - _least, _high - _low + moves.Length);
+        for (int place = _low; place <= _high; place++)
         {
+            double mass = from[place - _least];
+            var targets = to.AsSpan(place + first - _least, moves.Length);
             for (int k = 0; k < moves.Length; k++)
-                _moved[i + k] += _mass[i] * moves[k];
+                targets[k] += mass * moves[k];
         }
 
-        (_mass, _moved) = (_moved, _mass);
-        _low += centred ? -(moves.Length / 2) : 0;
-        _high = _low + wider - 1;
-        Keep(place => _mass[place - _low] >= Negligible);
+        (_mass, _moved) = (to, from);
+        (_low, _high) = (_low + first, _high + first + moves.Length - 1);
+        while (_high >= _low && _mass[_high - _least] < Negligible)
+            _high--;
+        while (_high >= _low && _mass[_low - _least] < Negligible)
+            _low++;
     }
 
     /// <summary>Takes out what is at or beyond a limit on either side.</summary>
-    public void Drop(int from, int upTo) => Keep(place => place < from && place > upTo);
-
-    /// <summary>Hands what is at or beyond a limit on one side to another layer.</summary>
-    public void MoveTo(WalkLayer other, int from = int.MaxValue, int upTo = int.MinValue)
+    public void Drop(int from, int upTo)
     {
-        for (int place = _low; place <= _high; place++)
-        {
-            if (place >= from || place <= upTo)
-                other.Take(place, _mass[place - _low]);
-        }
-
-        Drop(from, upTo);
+        _high = Math.Min(_high, from - 1);
+        _low = Math.Max(_low, upTo + 1);
     }
 
-    // Shortens the range from both ends to where something is kept.
-    void Keep(Func<int, bool> kept)
+    /// <summary>Hands what is at or beyond a limit on either side to another layer.</summary>
+    public void MoveTo(WalkLayer other, int from, int upTo)
     {
-        int low = _low, high = _high;
-        while (high >= low && !kept(high))
-            high--;
-        while (low <= high && !kept(low))
-            low++;
-        if (low > _low && high >= low)
-            Array.Copy(_mass, low - _low, _mass, 0, high - low + 1);
-        (_low, _high) = (low, high);
+        for (; _high >= _low && _high >= from; _high--)
+            other.Take(_high, _mass[_high - _least]);
+        for (; _high >= _low && _low <= upTo; _low++)
+            other.Take(_low, _mass[_low - _least]);
     }
 
     void Take(int place, double mass)
     {
         if (_high < _low)
-            (_low, _high, _mass[0]) = (place, place, 0);
-        int low = Math.Min(_low, place), high = Math.Max(_high, place);
-        if (low < _low || high > _high)
-        {
-            var wider = new double[2 * (high - low + 1)];
-            Array.Copy(_mass, 0, wider, _low - low, _high - _low + 1);
-            (_mass, _low, _high) = (wider, low, high);
-        }
+            (_low, _high) = (place, place - 1);
+        Reserve(Math.Min(place, _low), Math.Max(place, _high));
+        for (; _high < place; _high++)
+            _mass[_high + 1 - _least] = 0;
+        for (; _low > place; _low--)
+            _mass[_low - 1 - _least] = 0;
+        _mass[place - _least] += mass;
+    }
 
-        _mass[place - _low] += mass;
+    void Reserve(int low, int high)
+    {
+        if (low >= _least && high < _least + _mass.Length)
+            return;
+
+        int least = Math.Min(low, _least) - Spare;
+        int length = Math.Max(high, _least + _mass.Length) + Spare - least;
+        var wider = new double[length];
+        _mass.CopyTo(wider, _least - least);
+        (_mass, _moved, _least) = (wider, new double[length], least);
     }
 }

@@ -12,9 +12,6 @@ sealed record HostContext
     /// <summary>The test method with namespace and class, without data row.</summary>
     public required string Method { get; init; }
 
-    /// <summary>What is one and the same object throughout one run of one test; null without a framework.</summary>
-    public object? Occasion { get; init; }
-
     /// <summary>Writes a line to the test's own output.</summary>
     public Action<string> Write { get; init; } = _ => { };
 

@@ -21,7 +21,6 @@ sealed class NUnitHost : Host
             Assembly = (Follow(test, "TypeInfo", "Type") as Type)?.Assembly.GetName().Name ?? "",
             Test = Follow(test, "FullName") as string ?? $"{type}.{member}",
             Method = $"{type}.{member}",
-            Occasion = test,
             Write = output is null ? _ => { } : output.WriteLine,
             Fail = Fail,
         };

@@ -21,7 +21,6 @@ sealed class XunitHost : Host
             Assembly = Follow(context, "TestAssembly", "AssemblyName") is string name ? name.Split(',')[0] : "",
             Test = Follow(test, "TestDisplayName") as string ?? $"{type}.{member}",
             Method = $"{type}.{member}",
-            Occasion = test,
             Write = write ?? (_ => { }),
         };
     }

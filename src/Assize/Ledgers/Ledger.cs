@@ -50,7 +50,7 @@ static class Ledger
             Confidence = claim.Confidence,
             Trials = report.Trials,
             Successes = report.Successes,
-            Cap = report.Cap == long.MaxValue ? null : report.Cap,
+            Cap = report.Cap,
             Observed = report.Trials == 0 ? null : report.Observed,
             IntervalLower = report.Interval.Lower,
             IntervalUpper = report.Interval.Upper,

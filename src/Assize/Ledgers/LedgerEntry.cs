@@ -69,8 +69,8 @@ public sealed record LedgerEntry
     /// <summary>Successes among them: with the trials, all that a later look at the history needs.</summary>
     public required long Successes { get; init; }
 
-    /// <summary>The most trials that could have been run; null without a cap.</summary>
-    public long? Cap { get; init; }
+    /// <summary>The most trials that could have been run.</summary>
+    public required long Cap { get; init; }
 
     /// <summary>The share of successes; null without a trial.</summary>
     public double? Observed { get; init; }
@@ -84,11 +84,11 @@ public sealed record LedgerEntry
     /// <summary>Natural logarithm of the evidence against the claim.</summary>
     public required double LogEvidenceAgainstClaim { get; init; }
 
-    /// <summary>Natural logarithm of the evidence against a defect below.</summary>
-    public required double LogEvidenceAgainstDefectBelow { get; init; }
+    /// <summary>Natural logarithm of the evidence against a defect below; null when there is none to catch.</summary>
+    public double? LogEvidenceAgainstDefectBelow { get; init; }
 
-    /// <summary>Natural logarithm of the evidence against a defect above.</summary>
-    public required double LogEvidenceAgainstDefectAbove { get; init; }
+    /// <summary>Natural logarithm of the evidence against a defect above; null when there is none to catch.</summary>
+    public double? LogEvidenceAgainstDefectAbove { get; init; }
 
     /// <summary>The verdict.</summary>
     public required Outcome Verdict { get; init; }

@@ -3,14 +3,18 @@ using Assize.Bounds;
 
 namespace Assize;
 
-/// <summary>One judging of one claim: its seed, its stream, the test around it; from the first trial to the verdict.</summary>
+/// <summary>One judging of one claim: its seed, its stream, the test around it; from the first trial to the
+/// verdict.</summary>
 sealed class Hearing
 {
+    // No name of an assembly, a test or a claim contains it, so that different parts never make the same whole.
+    const char Separator = '\u001f';
+
     Hearing(Claim claim, Site site, HostContext host)
     {
         (Claim, Site, Host, Seed) = (claim, site, host, RunSeed.Current);
-        Identity = Identities.Of(claim, site, host);
-        Stream = claim.Terms.OnlyTrial?.Stream ?? StreamKey.Of(Seed, Identity);
+        string name = string.Join(Separator, host.Assembly, host.Test, claim.Name, claim.Sentence);
+        Stream = StreamKey.Of(Seed, $"{name}{Separator}{Occurrences.Next(name)}");
     }
 
     public Claim Claim { get; }
@@ -21,70 +25,59 @@ sealed class Hearing
 
     public ulong Seed { get; }
 
-    /// <summary>What tells this claim from every other of the run: the test with its data row, the claim and its occurrence.</summary>
-    public string Identity { get; }
-
+    /// <summary>The key of the draws: of the seed, the test with its data row, the claim and its occurrence.</summary>
     public ulong Stream { get; }
 
     // The framework's context belongs to the calling thread, so it is captured here and never looked up again.
     public static Hearing Of(Claim claim, Site site) => new(claim, site, HostContext.Current(claim, site));
 
-    public Verdict Run<TDraw>(IRace<TDraw> race, Func<Random, TDraw> trial)
+    public Verdict Run<TDraw>(Func<IRace<TDraw>> start, Func<Random, TDraw> trial)
     {
-        if (Claim.Terms.OnlyTrial is { } only)
-            throw Alone(only, trial(Started(only.Trial)));
+        if (OnlyTrial() is { } only)
+            throw Alone(only, trial(TrialRandom.At(only.Stream, only.Trial)));
 
+        var race = start();
         var clock = Stopwatch.StartNew();
-        var runner = new TrialRunner<TDraw>(this, race);
         if (Claim.Terms.Threads == 1)
-            runner.Run(trial);
+            new SerialRunner<TDraw>(this, race).Run(trial);
         else
-            runner.RunInParallelAsync(Sync(trial)).GetAwaiter().GetResult();
-        return Decided(race, clock.Elapsed);
+            new ParallelRunner<TDraw>(this, race).RunAsync(random => new(trial(random))).GetAwaiter().GetResult();
+        return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
-    public async Task<Verdict> RunAsync<TDraw>(IRace<TDraw> race, Func<Random, Task<TDraw>> trial)
+    public async Task<Verdict> RunAsync<TDraw>(Func<IRace<TDraw>> start, Func<Random, Task<TDraw>> trial)
     {
-        ValueTask<TDraw> Draw(TrialRandom random, long number)
-        {
-            random.Start(Stream, number);
-            return new(trial(random));
-        }
+        if (OnlyTrial() is { } only)
+            throw Alone(only, await trial(TrialRandom.At(only.Stream, only.Trial)).ConfigureAwait(false));
 
-        if (Claim.Terms.OnlyTrial is { } only)
-            throw Alone(only, await trial(Started(only.Trial)).ConfigureAwait(false));
-
+        var race = start();
         var clock = Stopwatch.StartNew();
-        await new TrialRunner<TDraw>(this, race).RunInParallelAsync(Draw).ConfigureAwait(false);
-        return Decided(race, clock.Elapsed);
+        if (Claim.Terms.Threads == 1)
+            await new SerialRunner<TDraw>(this, race).RunAsync(trial).ConfigureAwait(false);
+        else
+            await new ParallelRunner<TDraw>(this, race).RunAsync(random => new(trial(random))).ConfigureAwait(false);
+        return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
     public TrialFailedException Failed(long trial, Exception cause)
     {
-        string? key = Site.CanReplay ? ReplayKey.Of(Stream, trial).ToString() : null;
+        string? key = Site.CanReplay ? ReplayKey.Of(Seed, Stream, trial).ToString() : null;
         return new TrialFailedException(VerdictText.OfFailedTrial(cause, trial, key), trial, key, cause);
     }
 
-    TrialRandom Started(long trial)
-    {
-        var random = new TrialRandom();
-        random.Start(Stream, trial);
-        return random;
-    }
-
-    Func<TrialRandom, long, ValueTask<TDraw>> Sync<TDraw>(Func<Random, TDraw> trial) => (random, number) =>
-    {
-        random.Start(Stream, number);
-        return new(trial(random));
-    };
+    /// <summary>The trial to run alone; null when the claim is to be judged.</summary>
+    ReplayKey? OnlyTrial() => Claim.Terms.OnlyTrial is null || Site.CanReplay
+        ? Claim.Terms.OnlyTrial
+        : throw new ClaimRefusedException("OnlyTrial cannot bring back a trial that takes no generator: "
+            + "let it draw from the Random it is given, or take OnlyTrial out.");
 
     // One trial decides nothing: the test must not pass by it.
-    static ClaimRefusedException Alone<TDraw>(ReplayKey key, TDraw draw) => new(
-        $"Trial {key.Trial} ran alone and yielded {draw}. One trial judges no claim: take OnlyTrial out again.");
+    static ClaimRefusedException Alone<TDraw>(ReplayKey key, TDraw draw) =>
+        new(VerdictText.OfOnlyTrial(key, draw?.ToString()));
 
-    Verdict Decided<TDraw>(IRace<TDraw> race, TimeSpan elapsed)
+    Verdict Decided(RaceReport report, Outcome? outcome, TimeSpan elapsed)
     {
-        var verdict = new Verdict(this, race.Report(), race.Outcome ?? Outcome.Undecided, elapsed);
+        var verdict = new Verdict(this, report, outcome ?? Outcome.Undecided, elapsed);
         Host.Write(VerdictText.Line(verdict));
         Ledger.Record(verdict);
         return verdict;

@@ -3,26 +3,28 @@ using Assize.Bounds;
 
 namespace Assize;
 
-/// <summary>Everything it takes to run one trial again, alone: the stream, the trial, and the runtime whose methods drew from it.</summary>
+/// <summary>Everything it takes to run one trial again, alone.</summary>
+/// <param name="Seed">The seed of the run.</param>
 /// <param name="Stream">The key of the claim's stream.</param>
 /// <param name="Trial">The trial, counted from 1.</param>
-/// <param name="Runtime">The major version of the runtime.</param>
-sealed record ReplayKey(ulong Stream, long Trial, int Runtime)
+/// <param name="Runtime">The runtime, some of whose methods drew from the stream in their own way.</param>
+sealed record ReplayKey(ulong Seed, ulong Stream, long Trial, Version Runtime)
 {
-    public static ReplayKey Of(ulong stream, long trial) => new(stream, trial, Environment.Version.Major);
+    public static ReplayKey Of(ulong seed, ulong stream, long trial) => new(seed, stream, trial, Environment.Version);
 
     public override string ToString() =>
-        string.Create(CultureInfo.InvariantCulture, $"{Stream:x16}-{Trial}-net{Runtime}");
+        string.Create(CultureInfo.InvariantCulture, $"{Seed:x16}-{Stream:x16}-{Trial}-net{Runtime}");
 
-    public static ReplayKey Parse(string text)
-    {
-        string[] parts = text.Split('-');
-        return parts.Length == 3
-            && ulong.TryParse(parts[0], NumberStyles.AllowHexSpecifier, CultureInfo.InvariantCulture, out ulong stream)
-            && long.TryParse(parts[1], NumberStyles.None, CultureInfo.InvariantCulture, out long trial) && trial > 0
-            && parts[2].StartsWith("net", StringComparison.Ordinal)
-            && int.TryParse(parts[2].AsSpan(3), NumberStyles.None, CultureInfo.InvariantCulture, out int runtime)
-                ? new ReplayKey(stream, trial, runtime)
-                : throw new ClaimRefusedException($"'{text}' is no replay key. Copy it whole from the failure text, for example 00c0ffee00c0ffee-17-net10.");
-    }
+    public static ReplayKey Parse(string text) =>
+        text.Split('-') is [{ Length: 16 } seed, { Length: 16 } stream, var trial, ['n', 'e', 't', .. var runtime]]
+            && Hexadecimal(seed) is { } seedValue
+            && Hexadecimal(stream) is { } streamValue
+            && long.TryParse(trial, NumberStyles.None, CultureInfo.InvariantCulture, out long number) && number > 0
+            && Version.TryParse(runtime, out var version)
+                ? new ReplayKey(seedValue, streamValue, number, version)
+                : throw new ClaimRefusedException($"'{text}' is no replay key. Copy it whole from the failure text; "
+                    + "it looks like 00c0ffee00c0ffee-0123456789abcdef-17-net10.0.1.");
+
+    static ulong? Hexadecimal(string text) =>
+        ulong.TryParse(text, NumberStyles.AllowHexSpecifier, CultureInfo.InvariantCulture, out ulong value) ? value : null;
 }

@@ -12,6 +12,14 @@ sealed class TrialRandom : Random
     ulong _second;
     bool _hasSecond;
 
+    /// <summary>A generator at the beginning of a trial.</summary>
+    public static TrialRandom At(ulong key, long trial)
+    {
+        var random = new TrialRandom();
+        random.Start(key, trial);
+        return random;
+    }
+
     /// <summary>Sets the generator to the beginning of a trial.</summary>
     public void Start(ulong key, long trial) => (_key, _trial, _block, _hasSecond) = (key, (ulong)trial, 0, false);
 

@@ -1,28 +1,33 @@
 namespace Assize;
 
 /// <summary>Produces the draws of a block of trials with a generator of its own.</summary>
-sealed class TrialWorker<TDraw>
+sealed class TrialWorker<TDraw>(ulong stream)
 {
     readonly TrialRandom _random = new();
-    readonly List<TDraw> _draws = [];
+    TDraw[] _draws = [];
+    int _count;
 
     /// <summary>The draws up to the end of the block, or up to the trial that threw.</summary>
-    public IReadOnlyList<TDraw> Draws => _draws;
+    public ReadOnlySpan<TDraw> Draws => _draws.AsSpan(0, _count);
 
     /// <summary>What the trial after the last draw threw; null when none did.</summary>
     public Exception? Failure { get; private set; }
 
+    /// <summary>The trial that threw, counted from 1.</summary>
     public long FailedTrial { get; private set; }
 
-    public async Task RunAsync(Func<TrialRandom, long, ValueTask<TDraw>> trial, long first, int count)
+    public async Task RunAsync(Func<Random, ValueTask<TDraw>> trial, long first, int count)
     {
-        (Failure, FailedTrial) = (null, 0);
-        _draws.Clear();
-        for (long number = first; number < first + count; number++)
+        if (_draws.Length < count)
+            _draws = new TDraw[count];
+        (_count, Failure) = (0, null);
+        for (long number = first; _count < count; number++)
         {
             try
             {
-                _draws.Add(await trial(_random, number).ConfigureAwait(false));
+                _random.Start(stream, number);
+                _draws[_count] = await trial(_random).ConfigureAwait(false);
+                _count++;
             }
             catch (Exception cause)
             {

@@ -9,11 +9,11 @@ public sealed record Plan
     readonly RatePlan _plan;
     readonly Lazy<ExpectedTrials> _expected;
 
-    internal Plan(RatePlan plan, RateStakes stakes)
+    internal Plan(RateStakes stakes)
     {
-        _plan = plan;
+        _plan = stakes.Plan;
         TrialCap = stakes.Trials;
-        _expected = new(() => ExpectedTrials.Of(plan.Edges, stakes));
+        _expected = new(() => ExpectedTrials.Of(stakes));
     }
 
     /// <summary>Trials under the fixed plan: this number, and every larger one, keeps risk and confidence.</summary>

@@ -34,10 +34,10 @@ public sealed record Verdict
     public double LogEvidenceAgainstClaim => Report.LogEvidenceAgainstClaim;
 
     /// <summary>The natural logarithm of the evidence that there is no defect below; infinite when there can be none.</summary>
-    public double LogEvidenceAgainstDefectBelow => Report.LogEvidenceAgainstDefectBelow;
+    public double LogEvidenceAgainstDefectBelow => Report.LogEvidenceAgainstDefectBelow ?? double.PositiveInfinity;
 
     /// <summary>The natural logarithm of the evidence that there is no defect above; infinite when there can be none.</summary>
-    public double LogEvidenceAgainstDefectAbove => Report.LogEvidenceAgainstDefectAbove;
+    public double LogEvidenceAgainstDefectAbove => Report.LogEvidenceAgainstDefectAbove ?? double.PositiveInfinity;
 
     /// <summary>The seed of the run.</summary>
     public ulong Seed => Hearing.Seed;

@@ -5,73 +5,101 @@ namespace Assize;
 /// <summary>The only wording of verdicts: for somebody who meets it on a red build, late.</summary>
 static class VerdictText
 {
-    const int Label = 13;
+    const int LabelWidth = 11;
+    const int LongestTrialText = 100;
 
     public static string Of(Verdict verdict)
     {
-        var text = new StringBuilder().AppendLine(Headline(verdict)).AppendLine();
+        var text = new StringBuilder().Append(Headline(verdict)).Append("\n\n");
         foreach (var (label, content) in Rows(verdict))
-            text.AppendLine($"  {label.PadRight(Label)}{content}");
+            text.Append($"  {label.PadRight(LabelWidth)}{content}\n");
+        if (verdict.Outcome != Outcome.Upheld)
+            text.Append('\n').Append(Replay(verdict));
         return text.ToString().TrimEnd();
     }
 
     /// <summary>One line for the test's output, whatever the verdict.</summary>
-    public static string Line(Verdict verdict) =>
-        $"{verdict.Outcome} in {Wording.Plural(verdict.Trials, "trial")}: {verdict.Claim.Sentence}; observed {Observed(verdict)}, "
-        + $"seed {RunSeed.Text(verdict.Seed)}";
+    public static string Line(Verdict verdict) => $"{Headline(verdict)} Seed {RunSeed.Text(verdict.Seed)}.";
 
     public static string OfFailedTrial(Exception cause, long trial, string? replayKey) =>
-        $"{cause.Message}\nThis was trial {Wording.Number(trial)}, and it threw {cause.GetType().Name} before the claim was decided. "
+        $"{cause.Message}\n\nThis is trial {Wording.Number(trial)}: it threw {cause.GetType().Name} before the claim was decided.\n"
         + (replayKey is null
             ? "The source takes no generator, so the trial cannot be brought back."
-            : $"To run it alone, put .OnlyTrial(\"{replayKey}\") before the last call.");
+            : $"To run it alone, under the debugger, write .OnlyTrial(\"{replayKey}\") after the claim.");
 
-    static string Headline(Verdict verdict) => verdict.Outcome switch
+    public static string OfOnlyTrial(ReplayKey key, string? draw)
     {
-        Outcome.Refuted => $"Claim refuted: {verdict.Claim.Sentence}.",
-        Outcome.Upheld => $"Claim upheld: {verdict.Claim.Sentence}.",
-        _ => $"Claim undecided, stopped by its own cap: {verdict.Claim.Sentence}.",
-    };
-
-    static IEnumerable<(string, string)> Rows(Verdict verdict)
-    {
-        yield return ("trial", Short(verdict.Hearing.Site.TrialText));
-        yield return ("observed", $"{Observed(verdict)}; the truth lies in {Wording.Interval(verdict.Interval)} "
-            + $"with confidence {Wording.Number(verdict.Claim.Confidence)}, whenever one stops");
-        yield return ("evidence", Evidence(verdict));
-        yield return ("sure", Sure(verdict));
-        yield return ("trials", Trials(verdict));
-        yield return ("theorem", verdict.Theorem);
-        if (verdict.Outcome != Outcome.Upheld)
-            yield return ("run again", verdict.CanReplay ? verdict.Hearing.Host.RunAgain(verdict.Seed) : "the source takes no generator: these draws cannot be brought back");
-        if (verdict.CanReplay)
-            yield return ("last trial", $".OnlyTrial(\"{ReplayKey.Of(verdict.Hearing.Stream, Math.Max(1, verdict.Trials))}\") runs it alone, for the debugger");
+        string runtime = key.Runtime == Environment.Version ? ""
+            : $" Its key was made on .NET {key.Runtime}; this is .NET {Environment.Version}, which may draw differently.";
+        return $"Trial {Wording.Number(key.Trial)} ran alone and yielded {draw}.{runtime} "
+            + "One trial judges no claim: take OnlyTrial out again.";
     }
 
-    static string Observed(Verdict verdict) => verdict.Trials == 0
-        ? "nothing"
-        : $"{Wording.Share(verdict.Observed, verdict.Trials)} ({Wording.Number(verdict.Report.Successes)} of {Wording.Number(verdict.Trials)})";
+    static string Headline(Verdict verdict)
+    {
+        string seen = verdict.Trials == 0
+            ? "not one trial was run"
+            : $"observed {Wording.Share(verdict.Observed, verdict.Trials)} in {Wording.Trials(verdict.Trials)}";
+        return $"{verdict.Outcome}: {verdict.Claim.Sentence}; {seen}.";
+    }
+
+    static IEnumerable<(string Label, string Content)> Rows(Verdict verdict)
+    {
+        yield return ("trial", OneLine(verdict.Hearing.Site.TrialText));
+        yield return ("place", $"{verdict.Hearing.Host.Test}, line {verdict.Hearing.Site.Line}");
+        yield return ("trials", Trials(verdict));
+        yield return ("true rate", $"{Wording.Interval(verdict.Interval)}, with confidence {Wording.Number(verdict.Claim.Confidence)} "
+            + "whenever one stops");
+        yield return ("", "(not the race turned around: it may reach into what the race has ruled out)");
+        yield return ("evidence", Evidence(verdict));
+        yield return ("theorem", verdict.Theorem);
+        yield return ("meaning", Meaning(verdict));
+    }
+
+    static string Trials(Verdict verdict)
+    {
+        var report = verdict.Report;
+        string used = $"{Wording.Number(report.Trials)} of {Wording.Number(report.Cap)} at most, "
+            + $"{Wording.Number(report.Successes)} of them successes";
+        return report.Accepts is { } accepts
+            ? $"{used}; {Wording.Number(accepts.Low)} to {Wording.Number(accepts.High)} uphold the claim"
+            : used;
+    }
 
     static string Evidence(Verdict verdict)
     {
-        double weaker = Math.Min(verdict.LogEvidenceAgainstDefectBelow, verdict.LogEvidenceAgainstDefectAbove);
-        return $"against the claim {Wording.Odds(verdict.LogEvidenceAgainstClaim)}, against a defect {Wording.Odds(weaker)}";
+        var report = verdict.Report;
+        var parts = new List<string> { $"{Wording.Odds(report.LogEvidenceAgainstClaim)} against the claim" };
+        if (report.LogEvidenceAgainstDefectBelow is { } below)
+            parts.Add($"{Wording.Odds(below)} against a defect below");
+        if (report.LogEvidenceAgainstDefectAbove is { } above)
+            parts.Add($"{Wording.Odds(above)} against a defect above");
+        return string.Join("; ", parts);
     }
 
-    static string Sure(Verdict verdict) => verdict.Outcome switch
+    static string Meaning(Verdict verdict) => verdict.Outcome switch
     {
-        Outcome.Refuted => $"were the claim right, this would happen in {Wording.OnceIn(verdict.Claim.Risk)} at most",
-        Outcome.Upheld => $"were there a defect, this would happen in {Wording.OnceIn(1 - verdict.Claim.Confidence)} at most",
-        _ => "nothing is said either way: allow more trials or more time, or claim less",
+        Outcome.Refuted => $"of runs where the claim is right, {Wording.OnceIn(verdict.Claim.Risk)} at most is refuted",
+        Outcome.Upheld => $"of runs with a defect, {Wording.OnceIn(verdict.Report.Miss)} at most is upheld",
+        _ => "a cap of the claim's own stopped it, and neither was shown: allow more trials or time, or a larger defect",
     };
 
-    static string Trials(Verdict verdict) => verdict.Report.Cap == long.MaxValue
-        ? Wording.Number(verdict.Trials)
-        : $"{Wording.Number(verdict.Trials)} of {Wording.Number(verdict.Report.Cap)} at most";
+    static string Replay(Verdict verdict)
+    {
+        if (!verdict.CanReplay)
+            return "The trial takes no generator, so these draws cannot be brought back: let it draw from the Random it is given.";
 
-    static string Short(string trialText)
+        var hearing = verdict.Hearing;
+        string command = $"Run it again, with the same draws:\n  {hearing.Host.RunAgain(verdict.Seed)}\n";
+        return verdict.Trials == 0
+            ? command
+            : $"{command}Its last trial alone, under the debugger, with this after the claim:\n"
+                + $"  .OnlyTrial(\"{ReplayKey.Of(verdict.Seed, hearing.Stream, verdict.Trials)}\")";
+    }
+
+    static string OneLine(string trialText)
     {
         string line = string.Join(' ', trialText.Split((char[]?)null, StringSplitOptions.RemoveEmptyEntries));
-        return line.Length <= 100 ? line : line[..99] + "…";
+        return line.Length <= LongestTrialText ? line : line[..(LongestTrialText - 1)] + "…";
     }
 }

@@ -1,30 +1,28 @@
 namespace Assize.Tests.Evidence;
 
-/// <summary>Every path of a race at once: where the count may be, trial by trial, by the race's own tests.</summary>
+/// <summary>Every path of a race at once: where the count may be, trial by trial, under the race's own exact
+/// tests.</summary>
 sealed class ExactRace
 {
-    // Mass this small cannot move a probability of 1e-20 in its fourth digit.
-    const double Negligible = 1e-26;
-
     readonly RateStakes _stakes;
     readonly double _rate;
-    readonly double[][] _alive;
-    long _redFrom;
-    long _redTo = -1;
-    long _aboveTo = -1;
-    long _belowFrom;
-    long _low;
-    long _high;
+    readonly Paths _neither;
+    readonly Paths _notAbove;
+    readonly Paths _notBelow;
+    Chord[] _chords = [];
+    Triggers _end;
+    long _stretchEnd;
 
     ExactRace(RateStakes stakes, double rate)
     {
         (_stakes, _rate) = (stakes, rate);
-        int width = (int)Math.Min(stakes.Trials + 2, 4_000_000);
-        // 0: no defect excluded, 1: the one above, 2: the one below.
-        _alive = [new double[width], new double[width], new double[width]];
-        int start = stakes.Bets.DefectAbove is null ? 1 : stakes.Bets.DefectBelow is null ? 2 : 0;
-        _alive[start][0] = 1;
+        var (above, below) = (stakes.Bets.DefectAbove, stakes.Bets.DefectBelow);
+        _neither = new Paths(above is not null && below is not null ? 1 : 0);
+        _notAbove = new Paths(above is null ? 1 : 0);
+        _notBelow = new Paths(above is not null && below is null ? 1 : 0);
     }
+
+    Paths[] All => [_neither, _notAbove, _notBelow];
 
     public double Red { get; private set; }
 
@@ -35,103 +33,85 @@ sealed class ExactRace
     public static ExactRace Of(RateStakes stakes, double rate)
     {
         var race = new ExactRace(stakes, rate);
-        race.Run();
+        double alive = 1;
+        for (long trials = 1; trials <= stakes.Trials && alive > 1e-16; trials++)
+        {
+            race.MeanTrials += alive;
+            race.Step(trials);
+            alive = race._neither.Total + race._notAbove.Total + race._notBelow.Total;
+        }
+
+        race.End(alive);
         return race;
     }
 
-    void Run()
+    void Step(long trials)
     {
-        double alive = 1;
-        for (long trials = 1; trials <= _stakes.Trials && alive > 1e-16; trials++)
-        {
-            MeanTrials += alive;
-            Move();
-            alive = Judge(trials);
-            if (trials == _stakes.Trials)
-                AtCap();
-        }
+        foreach (var paths in All)
+            paths.Step(_rate);
+        if (trials > _stretchEnd)
+            Stretch(trials - 1);
+
+        long low = All.Min(paths => paths.Low), high = All.Max(paths => paths.High);
+        if (_chords[0].Steps(trials, high) == 0)
+            Red += Take(Up(high, 0, s => _stakes.Refutes(trials, s)), -1);
+        if (_chords[1].Steps(trials, low) == 0)
+            Red += Take(long.MaxValue, Down(low, trials, s => _stakes.Refutes(trials, s)));
+        // Paths that have excluded a defect stay beyond its trigger: only the others can still cross it.
+        low = Math.Min(_neither.Low, _notBelow.Low);
+        high = Math.Max(_neither.High, _notAbove.High);
+        if (_chords[2].Steps(trials, low) == 0)
+            Exclude(Down(low, trials, s => _stakes.ExcludesAbove(trials, s)), long.MaxValue);
+        if (_chords[3].Steps(trials, high) == 0)
+            Exclude(-1, Up(high, 0, s => _stakes.ExcludesBelow(trials, s)));
     }
 
-    void Move()
+    void Exclude(long aboveTo, long belowFrom)
     {
-        _high++;
-        foreach (double[] mass in _alive)
-        {
-            for (long s = _high; s > _low; s--)
-                mass[s] = mass[s] * (1 - _rate) + mass[s - 1] * _rate;
-            mass[_low] *= 1 - _rate;
-        }
+        _neither.MoveTo(_notAbove, aboveTo);
+        _neither.MoveFrom(_notBelow, belowFrom);
+        Green += _notAbove.TakeFrom(belowFrom) + _notBelow.TakeTo(aboveTo);
     }
 
-    // Limits only grow with the trials, so each is found by walking on from where it was.
-    double Judge(long trials)
+    double Take(long from, long to) => All.Sum(paths => paths.TakeFrom(from) + paths.TakeTo(to));
+
+    void Stretch(long first)
     {
-        while (_redFrom <= trials && !(_redFrom * 2 > trials * _rate && _stakes.Bets.ClaimFromAbove is not null && Refuted(trials, _redFrom, upper: true)))
-            _redFrom++;
-        while (_stakes.Bets.ClaimFromBelow is not null && _redTo + 1 <= trials && Refuted(trials, _redTo + 1, upper: false))
-            _redTo++;
-        while (_stakes.Bets.DefectAbove is not null && _aboveTo + 1 <= trials && _stakes.ExcludesAbove(trials, _aboveTo + 1))
-            _aboveTo++;
-        while (_stakes.Bets.DefectBelow is not null && _belowFrom <= trials && !_stakes.ExcludesBelow(trials, _belowFrom))
-            _belowFrom++;
-        double alive = 0;
-        for (long s = _low; s <= _high; s++)
-            alive += JudgeAt(s);
-        while (_low < _high && _alive.Sum(mass => mass[_low]) < Negligible)
-            Clear(_low++);
-        while (_low < _high && _alive.Sum(mass => mass[_high]) < Negligible)
-            Clear(_high--);
-        return alive;
+        long last = Math.Min(_stakes.Trials, first + Math.Max(16, first / 64));
+        var start = _stakes.TriggersAt(first, _end);
+        _end = _stakes.TriggersAt(last, start);
+        _stretchEnd = last;
+        _chords =
+        [
+            Chord.Upper(first, last, start.RedFrom, _end.RedFrom),
+            Chord.Lower(first, last, start.RedTo, _end.RedTo),
+            Chord.Lower(first, last, start.NotAboveTo, _end.NotAboveTo),
+            Chord.Upper(first, last, start.NotBelowFrom, _end.NotBelowFrom),
+        ];
     }
 
-    bool Refuted(long trials, long successes, bool upper) =>
-        _stakes.Refutes(trials, successes) && Leans(trials, successes) == upper;
-
-    // Which of the two bets the wealth comes from.
-    bool Leans(long trials, long successes) => _stakes.Bets.ClaimFromBelow is null
-        || (_stakes.Bets.ClaimFromAbove is { } above && above.Log(trials, successes) > _stakes.Bets.ClaimFromBelow.Log(trials, successes));
-
-    double JudgeAt(long s)
+    // What is left at the cap is judged by the limits.
+    void End(double alive)
     {
-        bool red = s >= _redFrom || s <= _redTo;
-        bool notAbove = s <= _aboveTo, notBelow = _stakes.Bets.DefectBelow is not null && s >= _belowFrom;
-        if (red)
-            Red += Take(s, 0) + Take(s, 1) + Take(s, 2);
-        if (notAbove && notBelow)
-            Green += Take(s, 0);
-        if (notBelow)
-            Green += Take(s, 1);
-        if (notAbove)
-            Green += Take(s, 2);
-        if (notAbove)
-            _alive[1][s] += Take(s, 0);
-        if (notBelow)
-            _alive[2][s] += Take(s, 0);
-        return _alive[0][s] + _alive[1][s] + _alive[2][s];
+        if (alive <= 1e-16)
+            return;
+
+        Red += Take(_stakes.Limits.AcceptHigh + 1, _stakes.Limits.AcceptLow - 1);
+        Green += Take(0, -1);
     }
 
-    double Take(long s, int layer)
+    // From the rim of the window inwards, as long as the exact test says yes.
+    static long Up(long high, long least, Func<long, bool> holds)
     {
-        double mass = _alive[layer][s];
-        _alive[layer][s] = 0;
-        return mass;
+        while (high >= least && holds(high))
+            high--;
+        return high + 1;
     }
 
-    void Clear(long s)
+    static long Down(long low, long most, Func<long, bool> holds)
     {
-        foreach (double[] mass in _alive)
-            mass[s] = 0;
-    }
-
-    void AtCap()
-    {
-        for (long s = _low; s <= _high; s++)
-        {
-            double mass = Take(s, 0) + Take(s, 1) + Take(s, 2);
-            if (_stakes.Limits.Accept(s))
-                Green += mass;
-            else
-                Red += mass;
-        }
+        while (low <= most && holds(low))
+            low++;
+        return low - 1;
     }
 }

@@ -1,10 +1,12 @@
+using System.Globalization;
 using Assize.Bounds;
 
 namespace Assize.Tests.Evidence;
 
 /// <summary>
-/// The race's errors and length, exactly, against values that an independent program computed by the same dynamic programming
-/// over its own bets: the specification of the race, section 11.
+/// The race's errors and length, exactly, by dynamic programming over its own tests. The values come from a program
+/// that shares no code with this one: likelihood ratios in another language, weights as documented at
+/// <see cref="Bet"/>.
 /// </summary>
 public class RateRaceTests
 {
@@ -23,9 +25,10 @@ public class RateRaceTests
     [InlineData(.1, .025, .05, .05, .95, .8, .15, .95448, .04552, 1501.6, 5_487)]
     [InlineData(.1, .025, .05, .05, .95, .8, .05, .96397, .03603, 806.39, 5_487)]
     public void Two_sided_races_are_as_specified(
-        double target, double tolerance, double defect, double risk, double confidence, double targetShare, double truth,
-        double red, double green, double meanTrials, long cap) => IsAsSpecified(
-            Edges.Around(Domain.Rate, target, tolerance, defect), risk, confidence, targetShare, truth, red, green, meanTrials, cap);
+        double target, double tolerance, double defect, double risk, double confidence, double targetShare,
+        double truth, double red, double green, double meanTrials, long cap) => IsAsSpecified(
+            Edges.Around(Domain.Rate, target, tolerance, defect), risk, confidence, targetShare,
+            truth, red, green, meanTrials, cap);
 
     [Theory]
     [InlineData(.01, .01, 1e-9, .999, .01, 6.18e-10, 1, 2249.8, 14_113)]
@@ -33,14 +36,16 @@ public class RateRaceTests
     [InlineData(.1, .1, .05, .95, .1, .03426, .96574, 80.37, 328)]
     [InlineData(.1, .1, .05, .95, .2, .95822, .04178, 76.79, 328)]
     public void Races_of_at_most_are_as_specified(
-        double target, double defect, double risk, double confidence, double truth, double red, double green, double meanTrials, long cap) =>
-        IsAsSpecified(Edges.AtMost(Domain.Rate, target, defect), risk, confidence, .5, truth, red, green, meanTrials, cap);
+        double target, double defect, double risk, double confidence,
+        double truth, double red, double green, double meanTrials, long cap) => IsAsSpecified(
+            Edges.AtMost(Domain.Rate, target, defect), risk, confidence, .5, truth, red, green, meanTrials, cap);
 
     [Theory]
     [InlineData(.01, .005, 1e-9, .999, .01, 9.83e-10, 1, 3733.3, 30_299)]
     public void Races_of_at_least_are_as_specified(
-        double target, double defect, double risk, double confidence, double truth, double red, double green, double meanTrials, long cap) =>
-        IsAsSpecified(Edges.AtLeast(Domain.Rate, target, defect), risk, confidence, .5, truth, red, green, meanTrials, cap);
+        double target, double defect, double risk, double confidence,
+        double truth, double red, double green, double meanTrials, long cap) => IsAsSpecified(
+            Edges.AtLeast(Domain.Rate, target, defect), risk, confidence, .5, truth, red, green, meanTrials, cap);
 
     [Theory]
     [InlineData(.5, 0, .01, .5, 9.32e-10, 1, 48_625, 259_391)]
@@ -50,8 +55,10 @@ public class RateRaceTests
     [InlineData(.5, .005, .01, .505, 4.79e-10, 1, 148_141, 1_037_359)]
     [InlineData(.01, .0025, .005, .01, 4.9e-12, 1, 8_483, 222_855)]
     public void Long_races_are_as_specified(
-        double target, double tolerance, double defect, double truth, double red, double green, double meanTrials, long cap) => IsAsSpecified(
-            Edges.Around(Domain.Rate, target, tolerance, defect), 1e-9, .999, .5, truth, red, green, meanTrials, cap);
+        double target, double tolerance, double defect,
+        double truth, double red, double green, double meanTrials, long cap) => IsAsSpecified(
+            Edges.Around(Domain.Rate, target, tolerance, defect), 1e-9, .999, .5,
+            truth, red, green, meanTrials, cap);
 
     static void IsAsSpecified(
         Edges edges, double risk, double confidence, double targetShare, double truth,
@@ -70,11 +77,11 @@ public class RateRaceTests
     // Half a unit of the last digit printed, and a little for the rounding of this arithmetic.
     static double HalfOfLastDigit(double printed)
     {
-        string digits = printed.ToString("G15", System.Globalization.CultureInfo.InvariantCulture);
-        string lead = digits.Split('E')[0];
-        int decimals = lead.Contains('.', StringComparison.Ordinal) ? lead.Length - lead.IndexOf('.', StringComparison.Ordinal) - 1 : 0;
-        int exponent = digits.Contains('E', StringComparison.Ordinal)
-            ? int.Parse(digits.Split('E')[1], System.Globalization.CultureInfo.InvariantCulture) : 0;
-        return 0.5001 * Math.Pow(10, exponent - decimals) + 1e-12 * Math.Min(1, printed);
+        string[] parts = printed.ToString("E14", CultureInfo.InvariantCulture).Split('E');
+        int digits = parts[0].TrimEnd('0').Split('.')[1].Length;
+        int exponent = int.Parse(parts[1], CultureInfo.InvariantCulture);
+        // 1 is printed for whatever rounds to it at five places.
+        int lastPlace = printed == 1 ? -5 : exponent - digits;
+        return 0.5001 * Math.Pow(10, lastPlace) + 1e-12 * Math.Min(1, printed);
     }
 }
