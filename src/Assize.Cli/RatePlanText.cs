@@ -8,7 +8,7 @@ static class RatePlanText
     public static void Write(IAnsiConsole page, RateClaim claim)
     {
         var plan = claim.Plan();
-        page.MarkupLineInterpolated($"[bold]{claim}[/]");
+        page.MarkupLineInterpolated($"[bold]Claim: {claim}[/]");
         page.MarkupLineInterpolated($"Risk of a false failure {Numbers.Text(claim.Risk)}, confidence {Numbers.Text(claim.Confidence)}.");
         page.WriteLine();
         page.Write(Ways(plan));

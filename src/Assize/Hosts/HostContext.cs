@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace Assize;
 
 /// <summary>The test around a claim, as its framework knows it; captured once, on the thread that judges.</summary>
@@ -16,7 +18,7 @@ sealed record HostContext
     public Action<string> Write { get; init; } = _ => { };
 
     /// <summary>Fails the test in the framework's own way. It may return, where the framework gathers several failures.</summary>
-    public Action<Verdict> Fail { get; init; } = verdict => throw new ClaimRefutedException(verdict);
+    public Action<Verdict> Fail { get; init; } = Throw;
 
     /// <summary>The command that runs this test again with the same draws.</summary>
     public string RunAgain(ulong seed) => OperatingSystem.IsWindows()
@@ -28,6 +30,9 @@ sealed record HostContext
         var context = Host.All.Select(host => host.Context(site)).FirstOrDefault(found => found is not null) ?? WithoutFramework(site);
         return claim.Terms.Output is { } output ? context with { Write = output } : context;
     }
+
+    [StackTraceHidden]
+    static void Throw(Verdict verdict) => throw new ClaimRefutedException(verdict);
 
     static HostContext WithoutFramework(Site site) => new()
     {

@@ -1,3 +1,5 @@
+using System.Diagnostics;
+
 namespace Assize;
 
 /// <summary>NUnit. A refuted claim goes through its own Fail, which records the failure and gathers several inside a multiple assertion.</summary>
@@ -27,6 +29,7 @@ sealed class NUnitHost : Host
     }
 
     // Through a delegate: an invocation by reflection would wrap the failure and have it reported twice.
+    [StackTraceHidden]
     static void Fail(Verdict verdict) => Loaded(Assembly, "NUnit.Framework.Assert")!
         .GetMethod("Fail", [typeof(string)])!.CreateDelegate<Action<string>>()(verdict.ToString());
 }

@@ -7,10 +7,10 @@ namespace Assize;
 /// <param name="Seed">The seed of the run.</param>
 /// <param name="Stream">The key of the claim's stream.</param>
 /// <param name="Trial">The trial, counted from 1.</param>
-/// <param name="Runtime">The runtime, some of whose methods drew from the stream in their own way.</param>
-sealed record ReplayKey(ulong Seed, ulong Stream, long Trial, Version Runtime)
+/// <param name="Runtime">The runtime's major version: some of its methods draw from the stream in their own way.</param>
+sealed record ReplayKey(ulong Seed, ulong Stream, long Trial, int Runtime)
 {
-    public static ReplayKey Of(ulong seed, ulong stream, long trial) => new(seed, stream, trial, Environment.Version);
+    public static ReplayKey Of(ulong seed, ulong stream, long trial) => new(seed, stream, trial, Environment.Version.Major);
 
     public override string ToString() =>
         string.Create(CultureInfo.InvariantCulture, $"{Seed:x16}-{Stream:x16}-{Trial}-net{Runtime}");
@@ -20,10 +20,10 @@ sealed record ReplayKey(ulong Seed, ulong Stream, long Trial, Version Runtime)
             && Hexadecimal(seed) is { } seedValue
             && Hexadecimal(stream) is { } streamValue
             && long.TryParse(trial, NumberStyles.None, CultureInfo.InvariantCulture, out long number) && number > 0
-            && Version.TryParse(runtime, out var version)
+            && int.TryParse(runtime, NumberStyles.None, CultureInfo.InvariantCulture, out int version)
                 ? new ReplayKey(seedValue, streamValue, number, version)
                 : throw new ClaimRefusedException($"'{text}' is no replay key. Copy it whole from the failure text; "
-                    + "it looks like 00c0ffee00c0ffee-0123456789abcdef-17-net10.0.1.");
+                    + "it looks like 00c0ffee00c0ffee-0123456789abcdef-17-net10.");
 
     static ulong? Hexadecimal(string text) =>
         ulong.TryParse(text, NumberStyles.AllowHexSpecifier, CultureInfo.InvariantCulture, out ulong value) ? value : null;

@@ -5,21 +5,20 @@ namespace Assize;
 /// <summary>The only wording of verdicts: for somebody who meets it on a red build, late.</summary>
 static class VerdictText
 {
-    const int LabelWidth = 11;
+    const int LabelWidth = 13;
     const int LongestTrialText = 100;
 
     public static string Of(Verdict verdict)
     {
-        var text = new StringBuilder().Append(Headline(verdict)).Append("\n\n");
+        var text = new StringBuilder($"Claim {Called(verdict)}: {verdict.Claim.Sentence}.\n\n");
         foreach (var (label, content) in Rows(verdict))
             text.Append($"  {label.PadRight(LabelWidth)}{content}\n");
-        if (verdict.Outcome != Outcome.Upheld)
-            text.Append('\n').Append(Replay(verdict));
         return text.ToString().TrimEnd();
     }
 
     /// <summary>One line for the test's output, whatever the verdict.</summary>
-    public static string Line(Verdict verdict) => $"{Headline(verdict)} Seed {RunSeed.Text(verdict.Seed)}.";
+    public static string Line(Verdict verdict) => $"{verdict.Outcome} in {Wording.Trials(verdict.Trials)}: "
+        + $"{verdict.Claim.Sentence}; observed {Observed(verdict)}; seed {RunSeed.Text(verdict.Seed)}";
 
     public static string OfFailedTrial(Exception cause, long trial, string? replayKey) =>
         $"{cause.Message}\n\nThis is trial {Wording.Number(trial)}: it threw {cause.GetType().Name} before the claim was decided.\n"
@@ -29,73 +28,65 @@ static class VerdictText
 
     public static string OfOnlyTrial(ReplayKey key, string? draw)
     {
-        string runtime = key.Runtime == Environment.Version ? ""
-            : $" Its key was made on .NET {key.Runtime}; this is .NET {Environment.Version}, which may draw differently.";
+        string runtime = key.Runtime == Environment.Version.Major ? ""
+            : $" Its key was made on .NET {key.Runtime}; this is .NET {Environment.Version.Major}, which may draw differently.";
         return $"Trial {Wording.Number(key.Trial)} ran alone and yielded {draw}.{runtime} "
             + "One trial judges no claim: take OnlyTrial out again.";
     }
 
-    static string Headline(Verdict verdict)
+    static string Called(Verdict verdict) => verdict.Outcome switch
     {
-        string seen = verdict.Trials == 0
-            ? "not one trial was run"
-            : $"observed {Wording.Share(verdict.Observed, verdict.Trials)} in {Wording.Trials(verdict.Trials)}";
-        return $"{verdict.Outcome}: {verdict.Claim.Sentence}; {seen}.";
-    }
+        Outcome.Refuted => "refuted",
+        Outcome.Upheld => "upheld",
+        _ => "undecided",
+    };
 
     static IEnumerable<(string Label, string Content)> Rows(Verdict verdict)
     {
-        yield return ("trial", OneLine(verdict.Hearing.Site.TrialText));
-        yield return ("place", $"{verdict.Hearing.Host.Test}, line {verdict.Hearing.Site.Line}");
-        yield return ("trials", Trials(verdict));
-        yield return ("true rate", $"{Wording.Interval(verdict.Interval)}, with confidence {Wording.Number(verdict.Claim.Confidence)} "
-            + "whenever one stops");
-        yield return ("", "(not the race turned around: it may reach into what the race has ruled out)");
-        yield return ("evidence", Evidence(verdict));
-        yield return ("theorem", verdict.Theorem);
+        var hearing = verdict.Hearing;
+        yield return ("trial", OneLine(hearing.Site.TrialText));
+        yield return ("observed", Observed(verdict));
+        yield return ("true rate", $"{Wording.Interval(verdict.Interval)} with confidence "
+            + $"{Wording.Number(verdict.Claim.Confidence)}, whenever one stops; not the race turned around");
+        yield return ("evidence", Evidence(verdict.Report));
         yield return ("meaning", Meaning(verdict));
+        yield return ("trials", $"{Wording.Number(verdict.Trials)} of {Wording.Number(verdict.Report.Cap)} at most");
+        yield return ("theorem", Theorem(verdict.Report));
+        yield return ("seed", $"{RunSeed.Text(verdict.Seed)} on .NET {Environment.Version.Major}");
+        if (!verdict.CanReplay)
+            yield return ("run again", "not with these draws: the trial takes no generator. Let it draw from the Random it is given");
+        else if (!verdict.IsUpheld)
+            yield return ("run again", hearing.Host.RunAgain(verdict.Seed));
+        if (verdict is { CanReplay: true, IsUpheld: false, Trials: > 0 })
+            yield return ("last trial", $".OnlyTrial(\"{ReplayKey.Of(verdict.Seed, hearing.Stream, verdict.Trials)}\") "
+                + "after the claim runs it alone, for the debugger");
     }
 
-    static string Trials(Verdict verdict)
-    {
-        var report = verdict.Report;
-        string used = $"{Wording.Number(report.Trials)} of {Wording.Number(report.Cap)} at most, "
-            + $"{Wording.Number(report.Successes)} of them successes";
-        return report.Accepts is { } accepts
-            ? $"{used}; {Wording.Number(accepts.Low)} to {Wording.Number(accepts.High)} uphold the claim"
-            : used;
-    }
+    static string Observed(Verdict verdict) => verdict.Trials == 0
+        ? "nothing, for not one trial was run"
+        : $"{Wording.Share(verdict.Observed, verdict.Trials)} ({Wording.Number(verdict.Report.Successes)} of "
+            + $"{Wording.Number(verdict.Trials)})";
 
-    static string Evidence(Verdict verdict)
+    static string Evidence(RaceReport report)
     {
-        var report = verdict.Report;
-        var parts = new List<string> { $"{Wording.Odds(report.LogEvidenceAgainstClaim)} against the claim" };
+        var parts = new List<string> { $"against the claim {Wording.Odds(report.LogEvidenceAgainstClaim)}" };
         if (report.LogEvidenceAgainstDefectBelow is { } below)
-            parts.Add($"{Wording.Odds(below)} against a defect below");
+            parts.Add($"against a defect below {Wording.Odds(below)}");
         if (report.LogEvidenceAgainstDefectAbove is { } above)
-            parts.Add($"{Wording.Odds(above)} against a defect above");
+            parts.Add($"against a defect above {Wording.Odds(above)}");
         return string.Join("; ", parts);
     }
 
     static string Meaning(Verdict verdict) => verdict.Outcome switch
     {
-        Outcome.Refuted => $"of runs where the claim is right, {Wording.OnceIn(verdict.Claim.Risk)} at most is refuted",
-        Outcome.Upheld => $"of runs with a defect, {Wording.OnceIn(verdict.Report.Miss)} at most is upheld",
-        _ => "a cap of the claim's own stopped it, and neither was shown: allow more trials or time, or a larger defect",
+        Outcome.Refuted => $"were the claim right, this would happen in {Wording.OnceIn(verdict.Claim.Risk)} at most",
+        Outcome.Upheld => $"were there a defect, this would happen in {Wording.OnceIn(verdict.Report.Miss)} at most",
+        _ => "the claim's own cap stopped it, and neither was shown: allow more trials or time, or a larger defect",
     };
 
-    static string Replay(Verdict verdict)
-    {
-        if (!verdict.CanReplay)
-            return "The trial takes no generator, so these draws cannot be brought back: let it draw from the Random it is given.";
-
-        var hearing = verdict.Hearing;
-        string command = $"Run it again, with the same draws:\n  {hearing.Host.RunAgain(verdict.Seed)}\n";
-        return verdict.Trials == 0
-            ? command
-            : $"{command}Its last trial alone, under the debugger, with this after the claim:\n"
-                + $"  .OnlyTrial(\"{ReplayKey.Of(verdict.Seed, hearing.Stream, verdict.Trials)}\")";
-    }
+    static string Theorem(RaceReport report) => report.Accepts is { } accepts
+        ? $"{report.Theorem}: {Wording.Number(accepts.Low)} to {Wording.Number(accepts.High)} successes uphold the claim"
+        : report.Theorem;
 
     static string OneLine(string trialText)
     {
