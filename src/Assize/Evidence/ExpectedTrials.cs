@@ -31,9 +31,11 @@ public sealed record ExpectedTrials
         }
 
         var edges = stakes.Plan.Edges;
+        // What is alike on both sides needs one walk.
+        bool isMirrored = edges.LowerDefect == 1 - edges.UpperDefect && edges.LowerEdge == 1 - edges.UpperEdge;
         return new ExpectedTrials(
             At(edges.Target),
-            Math.Max(At(edges.LowerEdge), At(edges.UpperEdge)),
-            Math.Max(At(edges.LowerDefect), At(edges.UpperDefect)));
+            Math.Max(isMirrored ? 0 : At(edges.LowerEdge), At(edges.UpperEdge)),
+            Math.Max(isMirrored ? 0 : At(edges.LowerDefect), At(edges.UpperDefect)));
     }
 }

@@ -9,10 +9,11 @@ namespace Assize;
 /// </remarks>
 sealed class RaceWalk
 {
-    const long CoarseSteps = 2_000;
-    const long FineSteps = 1_000;
-    const double Negligible = 1e-9;
-    const double WideVariance = 4;
+    const long CoarseSteps = 500;
+    const long FineSteps = 700;
+    const double Negligible = 1e-6;
+    const double WideVariance = 1;
+    const int Far = 1_000_000_000;
 
     readonly TriggerTable _table;
     readonly RateStakes _stakes;
@@ -85,10 +86,13 @@ sealed class RaceWalk
         _notBelow.Drop(int.MaxValue, aboveTo);
     }
 
-    // The place on the grid of a limit that is reached from below, or from above.
-    int Reaching(long trials, long successes) => (int)Math.Clamp(Math.Ceiling(Place(trials, successes, -0.5)), -1e9, 1e9);
+    // The place on the grid of a limit that is reached from below, or from above; one that no count reaches is far away,
+    // for the steps of the grid may lead beyond what can be counted.
+    int Reaching(long trials, long successes) =>
+        successes > trials ? Far : (int)Math.Clamp(Math.Ceiling(Place(trials, successes, -0.5)), -Far, Far);
 
-    int Falling(long trials, long successes) => (int)Math.Clamp(Math.Floor(Place(trials, successes, 0.5)), -1e9, 1e9);
+    int Falling(long trials, long successes) =>
+        successes < 0 ? -Far : (int)Math.Clamp(Math.Floor(Place(trials, successes, 0.5)), -Far, Far);
 
     double Place(long trials, long successes, double drawnIn) =>
         IsWide ? (successes - trials * _rate) / _grid + drawnIn : successes;

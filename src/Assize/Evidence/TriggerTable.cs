@@ -3,7 +3,7 @@ namespace Assize;
 /// <summary>A race's triggers by number of trials: each one at first, later by straight lines between some.</summary>
 sealed class TriggerTable(RateStakes stakes)
 {
-    const long EachUpTo = 4096;
+    const long EachUpTo = 512;
     const int KnotsPerOctave = 32;
 
     readonly List<Triggers> _each = [];

@@ -3,7 +3,7 @@ namespace Assize;
 /// <summary>How much of a walk is at each place of its grid.</summary>
 sealed class WalkLayer
 {
-    const double Negligible = 1e-15;
+    const double Negligible = 1e-10;
     const int Spare = 64;
 
     double[] _mass = new double[Spare];
@@ -83,15 +83,17 @@ sealed class WalkLayer
         _mass[place - _least] += mass;
     }
 
+    // The arrays follow the walk: they hold a window, twice as wide as needed, around where it is.
     void Reserve(int low, int high)
     {
         if (low >= _least && high < _least + _mass.Length)
             return;
 
-        int least = Math.Min(low, _least) - Spare;
-        int length = Math.Max(high, _least + _mass.Length) + Spare - least;
-        var wider = new double[length];
-        _mass.CopyTo(wider, _least - least);
-        (_mass, _moved, _least) = (wider, new double[length], least);
+        int width = high - low + 1;
+        int least = low - width / 2 - Spare;
+        var wider = new double[2 * (width + Spare)];
+        if (_high >= _low)
+            Array.Copy(_mass, _low - _least, wider, _low - least, _high - _low + 1);
+        (_mass, _moved, _least) = (wider, new double[wider.Length], least);
     }
 }

@@ -15,6 +15,7 @@ public class ExpectedTrialsTests
     [InlineData(.75, .05, .1, 1e-9, .999)]
     [InlineData(.1, .01, .03, 1e-9, .999)]
     [InlineData(.9, .02, .05, 1e-6, .99)]
+    [InlineData(.9, .02, .05, 1e-9, .999)]
     [InlineData(.02, .01, .02, 1e-9, .999)]
     public void Estimates_of_two_sided_races_are_within_one_percent(
         double target, double tolerance, double defect, double risk, double confidence) =>
