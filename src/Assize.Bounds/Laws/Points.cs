@@ -53,14 +53,19 @@ public abstract partial class Law
 
 sealed class Points : Law, ILattice
 {
+    readonly double _anchor;
+    readonly double _offset;
+
     public Points(double[] values, double[] shares)
     {
         (Values, Shares) = (values, shares);
-        // The mean is taken about the first value, so that a large offset costs no digits of the spread.
-        double offset = Expected(value => value - values[0]);
-        Mean = values[0] + offset;
-        Variance = Expected(value => (value - Mean) * (value - Mean));
-        ThirdAbsoluteCentralMoment = Expected(value => Math.Abs((value - Mean) * (value - Mean) * (value - Mean)));
+        // All is counted from the value with the greatest share: neither a large offset nor a far tilt costs digits.
+        _anchor = values[Array.IndexOf(shares, shares.Max())];
+        _offset = Expected(value => value - _anchor);
+        Mean = _anchor + _offset;
+        Variance = Expected(value => Deviation(value) * Deviation(value));
+        ThirdAbsoluteCentralMoment = Expected(
+            value => Math.Abs(Deviation(value) * Deviation(value) * Deviation(value)));
     }
 
     public double[] Values { get; }
@@ -84,15 +89,15 @@ sealed class Points : Law, ILattice
         Check.Finite(tilt, nameof(tilt));
         double reach = Reach(tilt);
         return reach < 1
-            ? Elementary.LogOnePlus(Expected(value => Elementary.ExpExcess(tilt * (value - Mean))))
-            : reach + Elementary.Log(Expected(value => Elementary.Exp(tilt * (value - Mean) - reach)));
+            ? Elementary.LogOnePlus(Expected(value => Elementary.ExpExcess(tilt * Deviation(value))))
+            : reach + Elementary.Log(Expected(value => Elementary.Exp(tilt * Deviation(value) - reach)));
     }
 
     public override Law Tilted(double tilt)
     {
         Check.Finite(tilt, nameof(tilt));
         double reach = Reach(tilt);
-        double[] weights = [.. Values.Select((value, i) => Shares[i] * Elementary.Exp(tilt * (value - Mean) - reach))];
+        double[] weights = [.. Values.Select((value, i) => Shares[i] * Elementary.Exp(tilt * Deviation(value) - reach))];
         double sum = weights.Sum();
         return new Points(Values, [.. weights.Select(weight => weight / sum)]);
     }
@@ -105,7 +110,7 @@ sealed class Points : Law, ILattice
     {
         var sum = Complex.Zero;
         for (int i = 0; i < Values.Length; i++)
-            sum += Shares[i] * Characteristic.Turn(angle * ((Values[i] - Mean) / step));
+            sum += Shares[i] * Characteristic.Turn(angle * (Deviation(Values[i]) / step));
         return Characteristic.LogOnePlus(sum);
     }
 
@@ -122,7 +127,9 @@ sealed class Points : Law, ILattice
     static bool IsWhole(double ratio) => Math.Abs(ratio - Math.Round(ratio)) < 1e-9;
 
     // The greatest exponent: taken out before the exponentials, it keeps them from overflowing.
-    double Reach(double tilt) => Math.Max(tilt * (Minimum - Mean), tilt * (Maximum - Mean));
+    double Reach(double tilt) => Math.Max(tilt * Deviation(Minimum), tilt * Deviation(Maximum));
+
+    double Deviation(double value) => value - _anchor - _offset;
 
     double Expected(Func<double, double> function)
     {

@@ -77,6 +77,21 @@ public class PointsTests
         Assert.Equal((6, 1), (law.Tilted(1e5).Mean, law.Tilted(-1e5).Mean));
     }
 
+    // Beyond a tilt of 60 only the last two values count: a trial of rate e^-tilt.
+    [Theory]
+    [InlineData(60)]
+    [InlineData(-60)]
+    [InlineData(600)]
+    public void A_far_tilt_keeps_a_variance(double tilt)
+    {
+        double rate = Math.Exp(-Math.Abs(tilt));
+        var law = Law.WholeNumbers(1, 6).Tilted(tilt);
+
+        Assert.Equal(1, law.Variance / rate, 1e-12);
+        Assert.Equal(1, law.ThirdAbsoluteCentralMoment / rate, 1e-12);
+        Assert.Equal(1, law.CentralLogMoment(0.01) / (rate * (Math.Exp(-Math.Sign(tilt) * 0.01) - 1 + Math.Sign(tilt) * 0.01)), 1e-10);
+    }
+
     [Fact]
     public void Values_that_are_not_evenly_spaced_have_no_step()
     {

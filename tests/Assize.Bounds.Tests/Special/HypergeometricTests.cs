@@ -36,6 +36,17 @@ public class HypergeometricTests
         Assert.Equal(15_638, seen);
     }
 
+    [Fact]
+    public void Random_larger_cases_agree_with_whole_numbers()
+    {
+        var random = new Random(83);
+        for (int i = 0; i < 60; i++)
+        {
+            int population = random.Next(15, 900);
+            CheckAll(population, random.Next(0, population + 1), random.Next(0, population + 1));
+        }
+    }
+
     static int CheckAll(int population, int marked, int drawn)
     {
         BigInteger all = Choose(population, drawn), below = 0;
@@ -53,11 +64,16 @@ public class HypergeometricTests
 
     static void AssertLog(BigInteger ways, BigInteger all, double logarithm)
     {
+        // Rounded once, far below the last place of a double.
+        double probability = (double)((ways << 1000) / all) * Math.Pow(2, -1000);
         if (ways.IsZero)
             Assert.Equal(double.NegativeInfinity, logarithm);
+        else if (probability > 1e-250)
+            Assert.True(
+                ReferenceTable.RelativeError(Math.Exp(logarithm), probability) < Accuracy,
+                $"{logarithm:R} instead of ln {probability:R}");
         else
-            Assert.True(ReferenceTable.RelativeError(Math.Exp(logarithm), (double)ways / (double)all) < 1e-13,
-                $"{ways}/{all}: {logarithm:R}");
+            Assert.Equal(1, logarithm / (BigInteger.Log(ways) - BigInteger.Log(all)), 1e-14);
     }
 
     static BigInteger Choose(int n, int k)
