@@ -97,7 +97,8 @@ sealed class Points : Law, ILattice
     {
         Check.Finite(tilt, nameof(tilt));
         double reach = Reach(tilt);
-        double[] weights = [.. Values.Select((value, i) => Shares[i] * Elementary.Exp(tilt * Deviation(value) - reach))];
+        double[] weights = [.. Values.Select(
+            (value, i) => Shares[i] * Elementary.Exp(tilt * Deviation(value) - reach))];
         double sum = weights.Sum();
         return new Points(Values, [.. weights.Select(weight => weight / sum)]);
     }

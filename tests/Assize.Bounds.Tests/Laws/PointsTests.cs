@@ -89,7 +89,8 @@ public class PointsTests
 
         Assert.Equal(1, law.Variance / rate, 1e-12);
         Assert.Equal(1, law.ThirdAbsoluteCentralMoment / rate, 1e-12);
-        Assert.Equal(1, law.CentralLogMoment(0.01) / (rate * (Math.Exp(-Math.Sign(tilt) * 0.01) - 1 + Math.Sign(tilt) * 0.01)), 1e-10);
+        Assert.Equal(1, law.CentralLogMoment(0.01)
+            / (rate * (Math.Exp(-Math.Sign(tilt) * 0.01) - 1 + Math.Sign(tilt) * 0.01)), 1e-10);
     }
 
     [Fact]
