@@ -57,6 +57,8 @@ public sealed partial class RunPageTests : IDisposable
         Assert.Contains("Red in at least 1 of 25 runs on healthy code", output, StringComparison.Ordinal);
         Assert.Contains("Red in at least 1 of 5,660 runs on healthy code", output, StringComparison.Ordinal);
         Assert.Contains("1 judged in", output, StringComparison.Ordinal);
+        // xunit v3's own words: a refuted claim is a failure, not an error.
+        Assert.Contains("Total: 4, Errors: 0, Failed: 1", output, StringComparison.Ordinal);
         Assert.Contains("Findings   2 in hand-written tests and claims", output, StringComparison.Ordinal);
         Assert.Equal(Failure(Testing.Repository.Read("README.md")), Failure(output));
     }
