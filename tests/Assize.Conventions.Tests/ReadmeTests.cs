@@ -6,10 +6,21 @@ namespace Assize.Conventions.Tests;
 public partial class ReadmeTests
 {
     [Fact]
-    public void Every_block_of_code_stands_in_the_samples()
+    public void Every_block_of_code_stands_in_the_samples() => StandsInTheSamples("README.md");
+
+    [Fact]
+    public void So_does_every_block_of_the_pages_of_claims()
+    {
+        var pages = Testing.Repository.Files("src/docs/claims", "*.md");
+
+        Assert.NotEmpty(pages);
+        Assert.All(pages, page => StandsInTheSamples($"src/docs/claims/{page}"));
+    }
+
+    static void StandsInTheSamples(string page)
     {
         var samples = Sources.Below("samples").Select(file => Flat(File.ReadAllText(file))).ToArray();
-        var blocks = CodeBlock().Matches(Testing.Repository.Read("README.md")).Select(match => Flat(match.Groups[1].Value)).ToArray();
+        var blocks = CodeBlock().Matches(Testing.Repository.Read(page)).Select(match => Flat(match.Groups[1].Value)).ToArray();
 
         Assert.NotEmpty(blocks);
         Assert.All(blocks, block => Assert.Contains(samples, sample => sample.Contains(block, StringComparison.Ordinal)));
