@@ -15,20 +15,20 @@ static class RatePlanJson
         {
             ["trials"] = plan.FixedTrials,
             ["firstTrials"] = plan.FirstTrials,
-            ["acceptLow"] = plan.Limits.AcceptLow,
-            ["acceptHigh"] = plan.Limits.AcceptHigh,
+            ["acceptLow"] = plan.Limits!.AcceptLow,
+            ["acceptHigh"] = plan.Limits!.AcceptHigh,
             ["theorem"] = plan.Theorem,
-            ["falseFailure"] = Ends(plan.Limits.FalseFailure),
-            ["missedDefect"] = Ends(plan.Limits.MissedDefect),
+            ["falseFailure"] = Ends(plan.Limits!.FalseFailure),
+            ["missedDefect"] = Ends(plan.Limits!.MissedDefect),
         },
         ["sequential"] = new JsonObject
         {
             ["cap"] = plan.TrialCap,
             ["expectedTrials"] = new JsonObject
             {
-                ["atTarget"] = plan.Expected.AtTarget,
-                ["atTolerance"] = plan.Expected.AtTolerance,
-                ["atDefect"] = plan.Expected.AtDefect,
+                ["atTarget"] = plan.Expected!.AtTarget,
+                ["atTolerance"] = plan.Expected!.AtTolerance,
+                ["atDefect"] = plan.Expected!.AtDefect,
             },
         },
         ["theorems"] = new JsonArray([.. plan.Alternatives.Select(theorem => new JsonObject

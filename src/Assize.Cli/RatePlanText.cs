@@ -19,13 +19,13 @@ static class RatePlanText
     static Grid Ways(Plan plan)
     {
         var grid = new Grid().AddColumn(new GridColumn().NoWrap().PadRight(3)).AddColumn();
-        grid.AddRow("Sequential", $"about {Trials(plan.Expected.AtTarget)} trials when the rate is at its target,");
-        grid.AddRow("", $"{Trials(plan.Expected.AtTolerance)} at the edge of the tolerance, {Trials(plan.Expected.AtDefect)} at the defect,");
+        grid.AddRow("Sequential", $"about {Trials(plan.Expected!.AtTarget)} trials when the rate is at its target,");
+        grid.AddRow("", $"{Trials(plan.Expected!.AtTolerance)} at the edge of the tolerance, {Trials(plan.Expected!.AtDefect)} at the defect,");
         grid.AddRow("", $"never more than {Numbers.Text(plan.TrialCap)}");
         grid.AddRow("", "");
         grid.AddRow("Fixed", $"{Numbers.Text(plan.FixedTrials)} trials: {Region(plan)}");
-        grid.AddRow("", $"false failure at most {Numbers.AtMost(plan.Limits.FalseFailure.Upper)}, "
-            + $"missed defect at most {Numbers.AtMost(plan.Limits.MissedDefect.Upper)}");
+        grid.AddRow("", $"false failure at most {Numbers.AtMost(plan.Limits!.FalseFailure.Upper)}, "
+            + $"missed defect at most {Numbers.AtMost(plan.Limits!.MissedDefect.Upper)}");
         if (plan.FirstTrials < plan.FixedTrials)
             grid.AddRow("", $"({Numbers.Text(plan.FirstTrials)} is the first number that works; from {Numbers.Text(plan.FixedTrials)} on, every number does)");
         return grid;
@@ -33,7 +33,7 @@ static class RatePlanText
 
     static string Region(Plan plan)
     {
-        var limits = plan.Limits;
+        var limits = plan.Limits!;
         if (limits.AcceptLow <= 0)
             return $"upheld by {Numbers.Text(limits.AcceptHigh)} successes or fewer";
         return limits.AcceptHigh >= limits.Trials

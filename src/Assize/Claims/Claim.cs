@@ -23,6 +23,26 @@ public abstract partial record Claim
     /// <summary>What is claimed, in words, without a full stop.</summary>
     internal abstract string Sentence { get; }
 
+    /// <summary>What is claimed, in numbers.</summary>
+    internal abstract Statement Statement { get; }
+
+    /// <summary>The exact number of trials the author asked for; null when the race decides how many.</summary>
+    /// <param name="plan">The fixed plan, made only when it is needed.</param>
+    private protected long? ExactTrials(Func<long> plan)
+    {
+        if (Terms.Trials is not { } trials)
+            return null;
+        if (Terms.TrialCap < trials)
+            throw new ClaimRefusedException($"WithTrials({Wording.Literal(trials)}) cannot finish below "
+                + $"WithTrialCap({Wording.Literal(Terms.TrialCap.Value)}): leave one of them out.");
+
+        long needed = plan();
+        return trials >= needed ? trials : throw new ClaimRefusedException(
+            $"WithTrials({Wording.Literal(trials)}) is too few: {Sentence}, at risk {Wording.Number(Risk)} and confidence "
+            + $"{Wording.Number(Confidence)}, takes {Wording.Number(needed)} trials. Write WithTrials({Wording.Literal(needed)}), "
+            + "or leave it out: the race mostly needs fewer.");
+    }
+
     /// <summary>The trials this claim costs and the rule that decides, without running any.</summary>
     /// <returns>The plan, the same for every run.</returns>
     /// <exception cref="ClaimRefusedException">Risk and confidence cannot be met.</exception>

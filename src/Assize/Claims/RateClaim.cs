@@ -50,26 +50,18 @@ public sealed record RateClaim : Claim<bool>
 
     internal override string Sentence => Wording.Rate(Edges, Tolerance);
 
+    internal override Statement Statement => new("rate", "rate", Target, Tolerance, Defect, Edges);
+
     /// <inheritdoc/>
-    public override Plan Plan() => new(Stakes());
+    public override Plan Plan() => Assize.Plan.Of(Stakes());
 
     private protected override IRace<bool> Start()
     {
-        if (Terms.Trials is not { } trials)
-            return new RateRace(Stakes(), Terms.TrialCap);
-
-        if (Terms.TrialCap < trials)
-            throw new ClaimRefusedException($"WithTrials({Wording.Literal(trials)}) cannot finish below "
-                + $"WithTrialCap({Wording.Literal(Terms.TrialCap.Value)}): leave one of them out.");
-
         var plan = RatePlan.For(Edges, Risk, Confidence);
-        return trials >= plan.Trials ? new FixedRate(plan, plan.LimitsAt(trials)) : throw TooFew(trials, plan.Trials);
+        return ExactTrials(() => plan.Trials) is { } trials
+            ? new FixedRate(plan, plan.LimitsAt(trials))
+            : new RateRace(RateStakes.Of(plan), Terms.TrialCap);
     }
 
     RateStakes Stakes() => RateStakes.Of(RatePlan.For(Edges, Risk, Confidence));
-
-    ClaimRefusedException TooFew(long trials, long needed) => new(
-        $"WithTrials({Wording.Literal(trials)}) is too few: {Sentence}, at risk {Wording.Number(Risk)} and confidence "
-        + $"{Wording.Number(Confidence)}, takes {Wording.Number(needed)} trials. Write WithTrials({Wording.Literal(needed)}), "
-        + "or leave it out: the race mostly needs fewer.");
 }

@@ -25,6 +25,6 @@ sealed class FixedRate(RatePlan plan, RateLimits limits) : IRace<bool>
     {
         var bets = new RateBets(plan.Edges);
         var report = RateReport.Of(plan, bets, _trials, _successes, plan.Theorem, limits.Trials);
-        return Outcome is null ? report : report with { Accepts = (limits.AcceptLow, limits.AcceptHigh) };
+        return Outcome is null ? report : report with { Accepts = Wording.Counts(limits) };
     }
 }

@@ -5,9 +5,11 @@ sealed record RaceReport
 {
     public required long Trials { get; init; }
 
-    public required long Successes { get; init; }
-
+    /// <summary>The value observed, of the quantity claimed; NaN without a trial.</summary>
     public required double Observed { get; init; }
+
+    /// <summary>What was observed, in words; null when the number says it all.</summary>
+    public string? Seen { get; init; }
 
     public required (double Lower, double Upper) Interval { get; init; }
 
@@ -27,6 +29,19 @@ sealed record RaceReport
     /// <summary>The most trials that could have been run.</summary>
     public required long Cap { get; init; }
 
-    /// <summary>The counts that uphold the claim, where the count at the last trial decided; else null.</summary>
-    public (long Low, long High)? Accepts { get; init; }
+    /// <summary>What upholds the claim, where the draws at the last trial decided: "7,400 to 7,600 successes"; else
+    /// null.</summary>
+    public string? Accepts { get; init; }
+
+    /// <summary>The fact that a draw, or all of them, contradict, in words; else null.</summary>
+    public string? Contradiction { get; init; }
+
+    /// <summary>More rows for the text: the categories that are off, the members that are refuted.</summary>
+    public IReadOnlyList<(string Label, string Content)> Details { get; init; } = [];
+
+    /// <summary>Successes, where draws are judged by one count.</summary>
+    public long? Successes { get; init; }
+
+    /// <summary>With the trials, all that a later look at the history needs, by name.</summary>
+    public IReadOnlyDictionary<string, double>? Counts { get; init; }
 }

@@ -67,7 +67,7 @@ sealed class RateRace : IRace<bool>
         var (plan, limits) = (_stakes.Plan, _stakes.Limits);
         string theorem = _decidedAtCap ? plan.Theorem : Theorem;
         var report = RateReport.Of(plan, _stakes.Bets, _trials, _successes, theorem, _cap);
-        return _decidedAtCap ? report with { Accepts = (limits.AcceptLow, limits.AcceptHigh) } : report;
+        return _decidedAtCap ? report with { Accepts = Wording.Counts(limits) } : report;
     }
 
     void Look()

@@ -14,6 +14,7 @@ static class RateReport
         Trials = trials,
         Successes = successes,
         Observed = trials == 0 ? double.NaN : (double)successes / trials,
+        Seen = trials == 0 ? null : Wording.Count(successes, trials),
         Interval = Interval(trials, successes, plan.Confidence),
         LogEvidenceAgainstClaim =
             Bet.Average(bets.ClaimFromAbove, bets.ClaimFromBelow, trials, successes).AtLeast,

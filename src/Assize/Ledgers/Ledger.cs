@@ -27,7 +27,8 @@ static class Ledger
     static LedgerEntry Entry(Verdict verdict)
     {
         var (hearing, report) = (verdict.Hearing, verdict.Report);
-        var claim = (RateClaim)hearing.Claim;
+        var claim = hearing.Claim;
+        var statement = claim.Statement;
         return new LedgerEntry
         {
             Schema = LedgerEntry.CurrentSchema,
@@ -38,22 +39,23 @@ static class Ledger
             Test = hearing.Host.Test,
             History = claim.Name ?? $"{hearing.Host.Method}: {claim.Sentence}",
             Claim = claim.Sentence,
-            Family = "rate",
-            Target = claim.Target,
-            Tolerance = claim.Tolerance,
-            Defect = claim.Defect,
-            LowerDefect = claim.Edges.LowerDefect,
-            LowerEdge = claim.Edges.LowerEdge,
-            UpperEdge = claim.Edges.UpperEdge,
-            UpperDefect = claim.Edges.UpperDefect,
+            Family = statement.Family,
+            Target = statement.Target,
+            Tolerance = statement.Tolerance,
+            Defect = statement.Defect,
+            LowerDefect = statement.Edges?.LowerDefect,
+            LowerEdge = statement.Edges?.LowerEdge,
+            UpperEdge = statement.Edges?.UpperEdge,
+            UpperDefect = statement.Edges?.UpperDefect,
             Risk = claim.Risk,
             Confidence = claim.Confidence,
             Trials = report.Trials,
             Successes = report.Successes,
+            Counts = report.Counts,
             Cap = report.Cap,
-            Observed = report.Trials == 0 ? null : report.Observed,
-            IntervalLower = report.Interval.Lower,
-            IntervalUpper = report.Interval.Upper,
+            Observed = Finite(report.Observed),
+            IntervalLower = Finite(report.Interval.Lower),
+            IntervalUpper = Finite(report.Interval.Upper),
             LogEvidenceAgainstClaim = report.LogEvidenceAgainstClaim,
             LogEvidenceAgainstDefectBelow = report.LogEvidenceAgainstDefectBelow,
             LogEvidenceAgainstDefectAbove = report.LogEvidenceAgainstDefectAbove,
@@ -66,4 +68,7 @@ static class Ledger
             Approximate = false,
         };
     }
+
+    // JSON has no infinity: an end that is not there is left out.
+    static double? Finite(double value) => double.IsFinite(value) ? value : null;
 }

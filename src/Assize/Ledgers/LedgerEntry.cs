@@ -33,11 +33,11 @@ public sealed record LedgerEntry
     /// <summary>What was claimed, in words.</summary>
     public required string Claim { get; init; }
 
-    /// <summary>The kind of claim: "rate".</summary>
+    /// <summary>The kind of claim: "rate", "mean", …</summary>
     public required string Family { get; init; }
 
-    /// <summary>The value claimed.</summary>
-    public required double Target { get; init; }
+    /// <summary>The value claimed; null when the claim is about many values.</summary>
+    public double? Target { get; init; }
 
     /// <summary>How far from the target is still right.</summary>
     public required double Tolerance { get; init; }
@@ -66,20 +66,25 @@ public sealed record LedgerEntry
     /// <summary>Trials the verdict rests on.</summary>
     public required long Trials { get; init; }
 
-    /// <summary>Successes among them: with the trials, all that a later look at the history needs.</summary>
-    public required long Successes { get; init; }
+    /// <summary>Successes among them, where draws are judged by one count: with the trials, all that a later look at
+    /// the history needs; else null.</summary>
+    public long? Successes { get; init; }
+
+    /// <summary>What else a later look at the history needs, by name; null where the successes are
+    /// enough.</summary>
+    public IReadOnlyDictionary<string, double>? Counts { get; init; }
 
     /// <summary>The most trials that could have been run.</summary>
     public required long Cap { get; init; }
 
-    /// <summary>The share of successes; null without a trial.</summary>
+    /// <summary>The value observed; null without a trial.</summary>
     public double? Observed { get; init; }
 
-    /// <summary>The lower end of the interval for the true value.</summary>
-    public required double IntervalLower { get; init; }
+    /// <summary>The lower end of the interval for the true value; null when it has none.</summary>
+    public double? IntervalLower { get; init; }
 
-    /// <summary>The upper end of the interval for the true value.</summary>
-    public required double IntervalUpper { get; init; }
+    /// <summary>The upper end of the interval for the true value; null when it has none.</summary>
+    public double? IntervalUpper { get; init; }
 
     /// <summary>Natural logarithm of the evidence against the claim.</summary>
     public required double LogEvidenceAgainstClaim { get; init; }

@@ -24,10 +24,12 @@ public sealed record Verdict
     /// <summary>Trials that the verdict rests on; 0 only when a cap stopped it before the first.</summary>
     public long Trials => Report.Trials;
 
-    /// <summary>The share of successes, in [0, 1]; NaN without a trial.</summary>
+    /// <summary>The value observed of what is claimed: for a rate, the share of successes; NaN without a
+    /// trial.</summary>
     public double Observed => Report.Observed;
 
-    /// <summary>Contains the true value with the claim's confidence, whenever the trials stopped. It is not the race turned around.</summary>
+    /// <summary>Contains the true value with the claim's confidence, whenever the trials stopped; NaN where the claim
+    /// is about many values. It is not the race turned around.</summary>
     public (double Lower, double Upper) Interval => Report.Interval;
 
     /// <summary>The natural logarithm of the evidence that the claim is wrong; infinite when one draw proves it.</summary>

@@ -45,9 +45,15 @@ static class VerdictText
     {
         var hearing = verdict.Hearing;
         yield return ("trial", OneLine(hearing.Site.TrialText));
+        var statement = verdict.Claim.Statement;
+        if (verdict.Report.Contradiction is { } contradiction)
+            yield return ("fact broken", contradiction);
         yield return ("observed", Observed(verdict));
-        yield return ("true rate", $"{Wording.Interval(verdict.Interval)} with confidence "
-            + $"{Wording.Number(verdict.Claim.Confidence)}, whenever one stops; not the race turned around");
+        foreach (var detail in verdict.Report.Details)
+            yield return detail;
+        if (!double.IsNaN(verdict.Interval.Lower))
+            yield return ($"true {statement.Quantity}", $"{Wording.Interval(verdict.Interval, statement.Edges?.Domain)} "
+                + $"with confidence {Wording.Number(verdict.Claim.Confidence)}, whenever one stops; not the race turned around");
         yield return ("evidence", Evidence(verdict.Report));
         yield return ("meaning", Meaning(verdict));
         yield return ("trials", $"{Wording.Number(verdict.Trials)} of {Wording.Number(verdict.Report.Cap)} at most");
@@ -64,8 +70,7 @@ static class VerdictText
 
     static string Observed(Verdict verdict) => verdict.Trials == 0
         ? "nothing, for not one trial was run"
-        : $"{Wording.Share(verdict.Observed, verdict.Trials)} ({Wording.Number(verdict.Report.Successes)} of "
-            + $"{Wording.Number(verdict.Trials)})";
+        : verdict.Report.Seen ?? Wording.Value(verdict.Observed, verdict.Interval);
 
     static string Evidence(RaceReport report)
     {
@@ -79,13 +84,15 @@ static class VerdictText
 
     static string Meaning(Verdict verdict) => verdict.Outcome switch
     {
+        Outcome.Refuted when verdict.Report.Contradiction is not null =>
+            "the draws are not what the claim takes for granted: mend the code, or the fact that the claim was given",
         Outcome.Refuted => $"were the claim right, this would happen in {Wording.OnceIn(verdict.Claim.Risk)} at most",
         Outcome.Upheld => $"were there a defect, this would happen in {Wording.OnceIn(verdict.Report.Miss)} at most",
         _ => "the claim's own cap stopped it, and neither was shown: allow more trials or time, or a larger defect",
     };
 
     static string Theorem(RaceReport report) => report.Accepts is { } accepts
-        ? $"{report.Theorem}: {Wording.Number(accepts.Low)} to {Wording.Number(accepts.High)} successes uphold the claim"
+        ? $"{report.Theorem}: {accepts} uphold the claim"
         : report.Theorem;
 
     static string OneLine(string trialText)

@@ -28,18 +28,46 @@ static class Wording
         return value.ToString("0." + new string('#', digits), Culture);
     }
 
-    /// <summary>An interval that contains the given one: its ends are rounded outwards to three digits of its
-    /// width.</summary>
-    public static string Interval((double Lower, double Upper) interval)
+    /// <summary>A share with its count: "0.75 (7,500 of 10,000)".</summary>
+    public static string Count(long successes, long trials) =>
+        $"{Share((double)successes / trials, trials)} ({Number(successes)} of {Number(trials)})";
+
+    /// <summary>The counts that uphold a claim: "7,400 to 7,600 successes".</summary>
+    public static string Counts(RateLimits limits) =>
+        $"{Number(limits.AcceptLow)} to {Number(limits.AcceptHigh)} successes";
+
+    /// <summary>A value to the digits that an interval around it can tell apart.</summary>
+    public static string Value(double value, (double Lower, double Upper) interval)
     {
         double width = interval.Upper - interval.Lower;
-        int digits = width > 0 ? Math.Clamp(2 - (int)Math.Floor(Math.Log10(width)), 1, 15) : 15;
-        double unit = Math.Pow(10, digits);
-        double lower = Math.Max(Math.Floor(interval.Lower * unit) / unit, 0);
-        double upper = Math.Min(Math.Ceiling(interval.Upper * unit) / unit, 1);
-        string format = "0." + new string('#', digits);
-        return $"{lower.ToString(format, Culture)} to {upper.ToString(format, Culture)}";
+        return width > 0 && width < double.MaxValue
+            ? Plain(value, Digits(width))
+            : value.ToString("G6", Culture);
     }
+
+    /// <summary>An interval that contains the given one: its ends are rounded outwards to three digits of its
+    /// width.</summary>
+    public static string Interval((double Lower, double Upper) interval, Domain? domain)
+    {
+        double width = interval.Upper - interval.Lower;
+        int digits = Digits(width);
+        double unit = Math.Pow(10, digits);
+        string End(double end, double limit, Func<double, double> outwards) =>
+            !double.IsFinite(end) ? (limit < 0 ? "-∞" : "∞")
+            : Math.Abs(end * unit) < 1e15 ? Plain(Clamped(outwards(end * unit) / unit, domain), digits)
+            : Exact(end);
+        return $"{End(interval.Lower, double.NegativeInfinity, Math.Floor)} to "
+            + $"{End(interval.Upper, double.PositiveInfinity, Math.Ceiling)}";
+    }
+
+    static double Clamped(double value, Domain? domain) =>
+        domain is null ? value : Math.Clamp(value, domain.Minimum, domain.Maximum);
+
+    static int Digits(double width) =>
+        width > 0 ? Math.Clamp(2 - (int)Math.Floor(Math.Log10(width)), 0, 15) : 15;
+
+    static string Plain(double value, int digits) =>
+        value.ToString(digits == 0 ? "#,0" : "#,0." + new string('#', digits), Culture);
 
     /// <summary>Evidence as odds, rounded down: "1,000 to 1", "3.2e11 to 1", "certain".</summary>
     public static string Odds(double log)

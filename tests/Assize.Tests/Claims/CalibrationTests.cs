@@ -58,7 +58,7 @@ public class CalibrationTests
     {
         var plan = Claim.Rate(0.5, tolerance, defect: 0.01).Plan();
 
-        Assert.InRange(plan.Expected.AtTarget, exactMean * 0.98, exactMean * 1.02);
+        Assert.InRange(plan.Expected!.AtTarget, exactMean * 0.98, exactMean * 1.02);
         Assert.True(4 * exactMean < plan.FixedTrials, $"{exactMean} of {plan.FixedTrials}");
     }
 }

@@ -21,7 +21,7 @@ public sealed class LedgerTests : IDisposable
 
         Assert.Equal((1, "rate", Outcome.Upheld), (entry.Schema, entry.Family, entry.Verdict));
         Assert.Equal((0.1, 0.0, 0.1, 1e-9, 0.999), (entry.Target, entry.Tolerance, entry.Defect, entry.Risk, entry.Confidence));
-        Assert.Equal((verdict.Trials, verdict.Observed), (entry.Trials, (double)entry.Successes / entry.Trials));
+        Assert.Equal((verdict.Trials, verdict.Observed), (entry.Trials, (double?)entry.Successes / entry.Trials));
         Assert.Null(entry.LogEvidenceAgainstDefectBelow);
         Assert.Null(entry.LowerEdge);
         Assert.False(entry.Approximate);
