@@ -20,4 +20,8 @@ public class RetryJitterTests
     [Test]
     public void No_wait_outlasts_its_window() =>
         Claim.RateAtMost(0, defect: 1e-4).MustHold(rng => jitter.Wait(5, rng) > jitter.Window(5));
+
+    [Test]
+    public void A_wait_takes_half_of_its_window_on_average() =>
+        Claim.Mean(4, tolerance: 0.05).DrawsBetween(0, 8).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
 }

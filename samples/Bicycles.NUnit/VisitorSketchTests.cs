@@ -12,6 +12,10 @@ public class VisitorSketchTests
     public void Estimates_fall_on_either_side_of_the_truth() =>
         Claim.Rate(0.5, tolerance: 0.1).MustHold(rng => Estimate(rng) > Riders);
 
+    [Test]
+    public void Estimates_are_right_on_average() =>
+        Claim.Mean(Riders, tolerance: 100).DrawsDeviateAtMost(400).MustHold(Estimate);
+
     static double Estimate(Random rng)
     {
         var sketch = new VisitorSketch(registers: 64, salt: (ulong)rng.NextInt64());

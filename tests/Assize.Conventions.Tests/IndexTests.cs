@@ -9,12 +9,13 @@ public partial class IndexTests
     public void The_table_of_claims_lists_every_factory()
     {
         var factories = typeof(Claim).GetMethods()
-            .Where(method => method is { IsStatic: true, IsPublic: true } && method.ReturnType.IsAssignableTo(typeof(Claim)))
+            .Where(method => method is { IsStatic: true, IsPublic: true, IsSpecialName: false })
+            .DistinctBy(method => method.Name)
             .OrderBy(method => method.Name, StringComparer.Ordinal)
             .Select(method => $"| `Claim.{method.Name}({string.Join(", ", method.GetParameters().Select(parameter => parameter.Name))})` | {Summary(method.Name)} |\n")
             .ToArray();
 
-        Assert.Equal(3, factories.Length);
+        Assert.True(factories.Length >= 6, $"only {factories.Length} factories seen");
         Testing.Repository.MustContain("README.md", "claims", "| claim | says |\n| --- | --- |\n" + string.Concat(factories));
     }
 
@@ -27,7 +28,7 @@ public partial class IndexTests
             .Select(page => $"| [{page.Title.Groups[1].Value}](analyzers/docs/{page.Page}) | {page.Title.Groups[2].Value} |\n")
             .ToArray();
 
-        Assert.Equal(4, pages.Length);
+        Assert.True(pages.Length >= 4, $"only {pages.Length} pages seen");
         Testing.Repository.MustContain("README.md", "rules", "| rule | says |\n| --- | --- |\n" + string.Concat(pages));
     }
 
@@ -35,7 +36,7 @@ public partial class IndexTests
     static string Summary(string factory)
     {
         string documentation = File.ReadAllText(Path.Combine(AppContext.BaseDirectory, "Assize.xml"));
-        var summary = Regex.Match(documentation, $@"<member name=""M:Assize\.Claim\.{factory}\([^""]*"">\s*<summary>(.*?)</summary>", RegexOptions.Singleline);
+        var summary = Regex.Match(documentation, $@"<member name=""M:Assize\.Claim\.{factory}(?:``\d)?\([^""]*"">\s*<summary>(.*?)</summary>", RegexOptions.Singleline);
         Assert.True(summary.Success, $"{factory} has no summary");
         return summary.Groups[1].Value.Trim();
     }

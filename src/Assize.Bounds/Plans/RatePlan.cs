@@ -13,8 +13,6 @@ public sealed class RatePlan
     /// <summary>No plan is made beyond this many trials: 1e15.</summary>
     public const long MaximumTrials = 1_000_000_000_000_000;
 
-    const double LeastProbability = 1e-300;
-
     readonly RateSide? _lower;
     readonly RateSide? _upper;
     readonly List<RateSearch> _searches = [];
@@ -54,14 +52,7 @@ public sealed class RatePlan
             throw new ArgumentNullException(nameof(edges));
         if (!(edges.Domain.Minimum >= 0 && edges.Domain.Maximum <= 1))
             throw Refused("A rate lies between 0 and 1; these edges are of another quantity. Use Domain.Rate.");
-        if (!(risk >= LeastProbability && risk < 1))
-            throw Refused($"The risk must lie between 1e-300 and 1; it is {Check.Text(risk)}. Usual is 1e-9.");
-        if (!(confidence > 0 && confidence < 1))
-            throw Refused($"The confidence must lie between 0 and 1; it is {Check.Text(confidence)}. Usual is 0.999.");
-        if (!(confidence > risk))
-            throw Refused($"The confidence ({Check.Text(confidence)}) must be greater than the risk "
-                + $"({Check.Text(risk)}): a verdict that ignores the draws would do as well.");
-
+        Demand.RiskAndConfidence(risk, confidence);
         return new RatePlan(edges, risk, confidence, Decimals.Complement(confidence));
     }
 

@@ -105,4 +105,24 @@ public static class Hoeffding
         public override long? TrialsNeeded(RatePlan plan, IReadOnlyList<RateSide> sides) =>
             Greatest(sides, side => ChernoffTrials.Ceiling(side, plan.Miss));
     }
+
+    sealed class OfMeans : MeanTheorem
+    {
+        public override string Name => "Hoeffding";
+
+        public override string Assumes => "independent draws in a range";
+
+        public override bool Applies(MeanFacts facts) => facts.Range is not null;
+
+        // The divergence from a level to a mean below it grows as the mean falls: the edge is the worst case.
+        public override double Beyond(MeanFacts facts, long trials, double mean, double margin)
+        {
+            double range = facts.Range!.Value;
+            double share = (mean - facts.Minimum!.Value) / range;
+            double level = (mean + margin - facts.Minimum.Value) / range * (1 - 1e-15);
+            if (level <= share)
+                return 1;
+            return level > 1 ? 0 : UpperTail(trials, level, Math.Max(0, share)).Upper;
+        }
+    }
 }

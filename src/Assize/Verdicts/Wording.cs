@@ -101,23 +101,44 @@ static class Wording
     /// <summary>What is claimed of a rate, and what must be caught, in one sentence without a full stop.</summary>
     public static string Rate(Edges edges, double tolerance)
     {
+        if (!ZeroFailures.Applies(edges))
+            return Claimed("rate", edges, tolerance);
+
+        return $"it {(edges.Target == 0 ? "never" : "always")} happens {Caught(edges)}";
+    }
+
+    /// <summary>What is claimed of a quantity, and what must be caught: "the mean is 3.5, give or take 0.05 (caught from
+    /// 3.4 down and from 3.6 up)".</summary>
+    public static string Claimed(string quantity, Edges edges, double tolerance)
+    {
+        string target = Number(edges.Target);
+        bool isTwoSided = edges is { LowerEdge: not null, UpperEdge: not null };
+        string claimed = tolerance > 0 ? $"{target}, give or take {Number(tolerance)}"
+            : isTwoSided ? $"exactly {target}"
+            : $"{target} {(edges.UpperEdge is null ? "or more" : "or less")}";
+        return $"the {quantity} is {claimed} {Caught(edges)}";
+    }
+
+    /// <summary>What is vouched for about a draw: "draws between 0 and 1 and of standard deviation up to 0.1".</summary>
+    public static string Facts(MeanFacts facts)
+    {
+        var parts = new List<string>();
+        if (facts is { Minimum: { } lower, Maximum: { } upper })
+            parts.Add($"between {Number(lower)} and {Number(upper)}");
+        if (facts.Proxy is { } proxy)
+            parts.Add($"sub-Gaussian of proxy {Number(proxy)}");
+        else if (facts.StandardDeviation is { } deviation)
+            parts.Add($"of standard deviation up to {Number(deviation)}");
+        return $"draws {string.Join(" and ", parts)}";
+    }
+
+    static string Caught(Edges edges)
+    {
         string[] defects =
         [
             .. edges.LowerDefect is { } low ? [$"from {Number(low)} down"] : Array.Empty<string>(),
             .. edges.UpperDefect is { } high ? [$"from {Number(high)} up"] : Array.Empty<string>(),
         ];
-        return $"{Claimed(edges, tolerance)} (caught {string.Join(" and ", defects)})";
-    }
-
-    static string Claimed(Edges edges, double tolerance)
-    {
-        if (ZeroFailures.Applies(edges))
-            return edges.Target == 0 ? "it never happens" : "it always happens";
-        if (tolerance > 0)
-            return $"the rate is {Number(edges.Target)}, give or take {Number(tolerance)}";
-        if (edges is { LowerEdge: not null, UpperEdge: not null })
-            return $"the rate is exactly {Number(edges.Target)}";
-
-        return $"the rate is {Number(edges.Target)} {(edges.UpperEdge is null ? "or more" : "or less")}";
+        return $"(caught {string.Join(" and ", defects)})";
     }
 }
