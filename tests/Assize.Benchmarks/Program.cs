@@ -1,0 +1,1 @@
+return Assize.Benchmarks.BenchmarkTable.Write(args);
