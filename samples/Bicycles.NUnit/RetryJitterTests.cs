@@ -24,4 +24,12 @@ public class RetryJitterTests
     [Test]
     public void A_wait_takes_half_of_its_window_on_average() =>
         Claim.Mean(4, tolerance: 0.05).DrawsBetween(0, 8).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
+
+    [Test]
+    public void Nine_waits_in_ten_end_before_nine_tenths_of_the_window() =>
+        Claim.Quantile(0.9, value: 7.2, tolerance: 0.01).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
+
+    [Test]
+    public void Waits_spread_over_the_whole_window() =>
+        Claim.StandardDeviation(2.31, tolerance: 0.1).DrawsBetween(0, 8).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
 }

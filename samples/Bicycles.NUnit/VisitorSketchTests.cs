@@ -16,6 +16,10 @@ public class VisitorSketchTests
     public void Estimates_are_right_on_average() =>
         Claim.Mean(Riders, tolerance: 100).DrawsDeviateAtMost(400).MustHold(Estimate);
 
+    [Test]
+    public void An_estimate_keeps_what_the_sketch_promises() =>
+        Claim.Accuracy(error: 600, probability: 0.95, defect: 0.05).MustHold(rng => (Estimate(rng), Riders));
+
     static double Estimate(Random rng)
     {
         var sketch = new VisitorSketch(registers: 64, salt: (ulong)rng.NextInt64());

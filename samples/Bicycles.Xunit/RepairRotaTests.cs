@@ -17,4 +17,8 @@ public class RepairRotaTests
     [Fact]
     public void One_bicycle_in_seven_stays_where_it_was() =>
         Claim.Rate(1 / 7.0, tolerance: 0.005).MustHold(rng => RepairRota.Draw(7, rng)[6] == 6);
+
+    [Fact]
+    public void The_first_place_and_the_last_are_equally_likely() =>
+        Claim.SameRate(tolerance: 0.02).MustHold(rng => RepairRota.Draw(5, rng)[0] == 2, rng => RepairRota.Draw(5, rng)[^1] == 2);
 }

@@ -6,7 +6,7 @@ namespace Assize;
 
 /// <summary>A claim about draws of one type: the verbs exist once, here, for every family.</summary>
 /// <typeparam name="TDraw">What one trial yields.</typeparam>
-public abstract record Claim<TDraw> : Claim
+public abstract partial record Claim<TDraw> : Claim
 {
     private protected Claim()
     {
@@ -96,7 +96,7 @@ public abstract record Claim<TDraw> : Claim
         [CallerMemberName] string member = "", [CallerFilePath] string file = "", [CallerLineNumber] int line = 0)
     {
         ArgumentNullException.ThrowIfNull(trial);
-        return Hearing.Of(this, new(trialText, member, file, line, CanReplay: true)).Run(Start, trial);
+        return Hearing.Of(this, new(trialText, member, file, line, Replay.Trial)).Run(Start, trial);
     }
 
     /// <summary>The same for a source that takes no generator: the verdict says that it cannot be replayed.</summary>
@@ -114,7 +114,7 @@ public abstract record Claim<TDraw> : Claim
         [CallerMemberName] string member = "", [CallerFilePath] string file = "", [CallerLineNumber] int line = 0)
     {
         ArgumentNullException.ThrowIfNull(source);
-        return Hearing.Of(this, new(trialText, member, file, line, CanReplay: false)).Run(Start, _ => source());
+        return Hearing.Of(this, new(trialText, member, file, line, Replay.None)).Run(Start, _ => source());
     }
 
     /// <summary>Runs asynchronous trials until the claim is upheld or refuted and hands back the verdict.</summary>
@@ -132,7 +132,7 @@ public abstract record Claim<TDraw> : Claim
         [CallerMemberName] string member = "", [CallerFilePath] string file = "", [CallerLineNumber] int line = 0)
     {
         ArgumentNullException.ThrowIfNull(trial);
-        return Hearing.Of(this, new(trialText, member, file, line, CanReplay: true)).RunAsync(Start, trial);
+        return Hearing.Of(this, new(trialText, member, file, line, Replay.Trial)).RunAsync(Start, trial);
     }
 
     /// <summary>The same for an asynchronous source that takes no generator: the verdict says that it cannot be replayed.</summary>
@@ -150,6 +150,6 @@ public abstract record Claim<TDraw> : Claim
         [CallerMemberName] string member = "", [CallerFilePath] string file = "", [CallerLineNumber] int line = 0)
     {
         ArgumentNullException.ThrowIfNull(source);
-        return Hearing.Of(this, new(trialText, member, file, line, CanReplay: false)).RunAsync(Start, _ => source());
+        return Hearing.Of(this, new(trialText, member, file, line, Replay.None)).RunAsync(Start, _ => source());
     }
 }

@@ -62,7 +62,9 @@ public sealed record MeanClaim : Claim<double>
     /// <inheritdoc/>
     public override Plan Plan() => Stakes().ToPlan();
 
-    private protected override IRace<double> Start()
+    private protected override IRace<double> Start() => NewRace();
+
+    internal IRace<double> NewRace()
     {
         var stakes = Stakes();
         return ExactTrials(() => stakes.Fixed.Trials) is { } trials

@@ -28,6 +28,12 @@ public abstract partial record Claim
     /// <exception cref="ClaimRefusedException">A number lies outside its domain, is NaN, or leaves nothing to catch.</exception>
     public static RateClaim RateAtMost(double target, double defect) =>
         new(Edges.AtMost(Domain.Rate, target, defect), target, 0, defect);
+
+    /// <summary>It never happens: enough trials without it show that its rate is below a limit.</summary>
+    /// <param name="limit">From this rate on it must be caught, in (0, 1).</param>
+    /// <returns>A claim about yes/no draws; the first yes refutes it.</returns>
+    /// <exception cref="ClaimRefusedException">The limit lies outside its domain, or is NaN.</exception>
+    public static RateClaim NeverAbove(double limit) => RateAtMost(0, limit);
 }
 
 /// <summary>A claim about how often something happens.</summary>
@@ -55,7 +61,9 @@ public sealed record RateClaim : Claim<bool>
     /// <inheritdoc/>
     public override Plan Plan() => Assize.Plan.Of(Stakes());
 
-    private protected override IRace<bool> Start()
+    private protected override IRace<bool> Start() => NewRace();
+
+    internal IRace<bool> NewRace()
     {
         var plan = RatePlan.For(Edges, Risk, Confidence);
         return ExactTrials(() => plan.Trials) is { } trials

@@ -10,6 +10,7 @@ sealed class MeanRecord(MeanStakes stakes, long cap)
     readonly DeviationFact? _fact = stakes.Deviation is { } deviation ? new(deviation, stakes.LogFact) : null;
     readonly MeanFacts _facts = stakes.Plan.Facts;
     Moments _moments;
+    long? _lastTrial;
 
     public long Trials => _moments.Trials;
 
@@ -21,7 +22,8 @@ sealed class MeanRecord(MeanStakes stakes, long cap)
     {
         if (!double.IsFinite(draw) || draw < _facts.Minimum || draw > _facts.Maximum)
         {
-            Contradiction = $"trial {Wording.Number(_moments.Trials + 1)} drew {Wording.Exact(draw)}, "
+            _lastTrial = _moments.Trials + 1;
+            Contradiction = $"trial {Wording.Number(_lastTrial.Value)} drew {Wording.Exact(draw)}, "
                 + (double.IsFinite(draw) ? $"which is not {Wording.Facts(_facts)["draws ".Length..]}" : "which is no number");
             return false;
         }
@@ -40,6 +42,7 @@ sealed class MeanRecord(MeanStakes stakes, long cap)
     public RaceReport Report(double against, double? below, double? above, string theorem) => new()
     {
         Trials = _moments.Trials,
+        LastTrial = _lastTrial,
         Observed = _moments.Trials == 0 ? double.NaN : _moments.Mean,
         Interval = _interval.At(stakes.Plan.Miss),
         LogEvidenceAgainstClaim = against,

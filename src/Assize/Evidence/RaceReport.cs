@@ -5,6 +5,9 @@ sealed record RaceReport
 {
     public required long Trials { get; init; }
 
+    /// <summary>The trial that settled it, where that is not the last one counted.</summary>
+    public long? LastTrial { get; init; }
+
     /// <summary>The value observed, of the quantity claimed; NaN without a trial.</summary>
     public required double Observed { get; init; }
 

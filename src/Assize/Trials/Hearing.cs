@@ -41,7 +41,7 @@ sealed class Hearing
         if (Claim.Terms.Threads == 1)
             new SerialRunner<TDraw>(this, race).Run(trial);
         else
-            new ParallelRunner<TDraw>(this, race).RunAsync(random => new(trial(random))).GetAwaiter().GetResult();
+            new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(random => new(trial(random))).GetAwaiter().GetResult();
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
@@ -55,8 +55,65 @@ sealed class Hearing
         if (Claim.Terms.Threads == 1)
             await new SerialRunner<TDraw>(this, race).RunAsync(trial).ConfigureAwait(false);
         else
-            await new ParallelRunner<TDraw>(this, race).RunAsync(random => new(trial(random))).ConfigureAwait(false);
+            await new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(random => new(trial(random))).ConfigureAwait(false);
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
+    }
+
+    /// <summary>Judges draws that are there already, in their order.</summary>
+    /// <exception cref="ClaimRefusedException">They end before the claim is decided.</exception>
+    public Verdict RunFor<TDraw>(IRace<TDraw> race, ReadOnlySpan<TDraw> sample)
+    {
+        RequireNoOnlyTrial();
+        var clock = Stopwatch.StartNew();
+        race.Add(sample);
+        return DecidedFor(race, sample.Length, clock);
+    }
+
+    /// <inheritdoc cref="RunFor{TDraw}(IRace{TDraw}, ReadOnlySpan{TDraw})"/>
+    public Verdict RunFor<TDraw>(IRace<TDraw> race, IEnumerable<TDraw> sample)
+    {
+        RequireNoOnlyTrial();
+        var (clock, trials) = (Stopwatch.StartNew(), 0L);
+        var end = new TrialClock(Claim.Terms);
+        using var draws = sample.GetEnumerator();
+        for (; race.Outcome is null && !end.IsOver() && draws.MoveNext(); trials++)
+            race.Add(draws.Current);
+        return DecidedFor(race, trials, clock);
+    }
+
+    /// <inheritdoc cref="RunFor{TDraw}(IRace{TDraw}, ReadOnlySpan{TDraw})"/>
+    public async Task<Verdict> RunForAsync<TDraw>(IRace<TDraw> race, IAsyncEnumerable<TDraw> sample)
+    {
+        RequireNoOnlyTrial();
+        var (clock, trials) = (Stopwatch.StartNew(), 0L);
+        var end = new TrialClock(Claim.Terms);
+        var draws = sample.GetAsyncEnumerator(Claim.Terms.Stop);
+        await using (draws.ConfigureAwait(false))
+        {
+            for (; race.Outcome is null && !end.IsOver() && await draws.MoveNextAsync().ConfigureAwait(false); trials++)
+                race.Add(draws.Current);
+        }
+
+        return DecidedFor(race, trials, clock);
+    }
+
+    // A sample that ends too soon has decided nothing: neither green nor red would be true.
+    Verdict DecidedFor<TDraw>(IRace<TDraw> race, long trials, Stopwatch clock)
+    {
+        if (race.Outcome is not null || Claim.Terms.MayStayUndecided)
+            return Decided(race.Report(), race.Outcome, clock.Elapsed);
+
+        var plan = Claim.Plan();
+        throw new ClaimRefusedException($"The sample is too small: its {Wording.Trials(trials)} leave it open whether "
+            + $"{Claim.Sentence}. {Wording.Number(plan.TrialCap)} always decide"
+            + (plan.Expected is { } expected ? $", about {Wording.Number((long)Math.Ceiling(expected.AtTarget))} mostly do when it is right" : "")
+            + ". Give more draws, or a larger defect.");
+    }
+
+    void RequireNoOnlyTrial()
+    {
+        if (Claim.Terms.OnlyTrial is not null)
+            throw new ClaimRefusedException("OnlyTrial runs one trial; a sample that is there already has none. Take OnlyTrial out.");
     }
 
     public TrialFailedException Failed(long trial, Exception cause)

@@ -5,5 +5,9 @@ namespace Assize;
 /// <param name="Member">The calling member.</param>
 /// <param name="File">The full path of the source file.</param>
 /// <param name="Line">The line, counted from 1.</param>
-/// <param name="CanReplay">Whether the trials draw from the generator they are given.</param>
-sealed record Site(string TrialText, string Member, string File, int Line, bool CanReplay);
+/// <param name="Replay">What a seed can bring back.</param>
+sealed record Site(string TrialText, string Member, string File, int Line, Replay Replay)
+{
+    /// <summary>Whether the seed brings the draws back.</summary>
+    public bool CanReplay => Replay is Replay.Trial or Replay.Batch;
+}

@@ -12,6 +12,20 @@ sealed class TrialRandom : Random
     ulong _second;
     bool _hasSecond;
 
+    // The golden ratio in 64 bits: any other key gives another stream.
+    const ulong OtherStream = 0x9E3779B97F4A7C15;
+
+    TrialRandom? _twin;
+
+    /// <summary>A second generator at the beginning of the same trial: with the same numbers, or apart on a stream of its
+    /// own. The next call takes it back.</summary>
+    public TrialRandom Twin(bool apart)
+    {
+        _twin ??= new TrialRandom();
+        _twin.Start(apart ? _key ^ OtherStream : _key, (long)_trial);
+        return _twin;
+    }
+
     /// <summary>A generator at the beginning of a trial.</summary>
     public static TrialRandom At(ulong key, long trial)
     {

@@ -44,7 +44,7 @@ static class VerdictText
     static IEnumerable<(string Label, string Content)> Rows(Verdict verdict)
     {
         var hearing = verdict.Hearing;
-        yield return ("trial", OneLine(hearing.Site.TrialText));
+        yield return (hearing.Site.Replay == Replay.Sample ? "sample" : "trial", OneLine(hearing.Site.TrialText));
         var statement = verdict.Claim.Statement;
         if (verdict.Report.Contradiction is { } contradiction)
             yield return ("fact broken", contradiction);
@@ -58,13 +58,24 @@ static class VerdictText
         yield return ("meaning", Meaning(verdict));
         yield return ("trials", $"{Wording.Number(verdict.Trials)} of {Wording.Number(verdict.Report.Cap)} at most");
         yield return ("theorem", Theorem(verdict.Report));
+        foreach (var row in Again(verdict))
+            yield return row;
+    }
+
+    static IEnumerable<(string Label, string Content)> Again(Verdict verdict)
+    {
+        var hearing = verdict.Hearing;
+        if (hearing.Site.Replay == Replay.Sample)
+            yield break;
+
         yield return ("seed", $"{RunSeed.Text(verdict.Seed)} on .NET {Environment.Version.Major}");
         if (!verdict.CanReplay)
             yield return ("run again", "not with these draws: the trial takes no generator. Let it draw from the Random it is given");
         else if (!verdict.IsUpheld)
             yield return ("run again", hearing.Host.RunAgain(verdict.Seed));
-        if (verdict is { CanReplay: true, IsUpheld: false, Trials: > 0 })
-            yield return ("last trial", $".OnlyTrial(\"{ReplayKey.Of(verdict.Seed, hearing.Stream, verdict.Trials)}\") "
+        long last = verdict.Report.LastTrial ?? verdict.Trials;
+        if (hearing.Site.Replay == Replay.Trial && !verdict.IsUpheld && last > 0)
+            yield return ("last trial", $".OnlyTrial(\"{ReplayKey.Of(verdict.Seed, hearing.Stream, last)}\") "
                 + "after the claim runs it alone, for the debugger");
     }
 

@@ -132,7 +132,8 @@ static class Wording
         return $"draws {string.Join(" and ", parts)}";
     }
 
-    static string Caught(Edges edges)
+    /// <summary>Which values must be caught: "(caught from 3.4 down and from 3.6 up)".</summary>
+    public static string Caught(Edges edges)
     {
         string[] defects =
         [

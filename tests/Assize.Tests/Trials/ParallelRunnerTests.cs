@@ -12,7 +12,7 @@ public class ParallelRunnerTests
     public void The_verdict_is_the_same_for_one_thread_and_two_and_for_every_block(double target, double truth)
     {
         var claim = Claim.Rate(target, tolerance: 0.01).InParallel(2);
-        var hearing = Hearing.Of(claim, new Site("", "", "", 0, CanReplay: true));
+        var hearing = Hearing.Of(claim, new Site("", "", "", 0, Replay.Trial));
         var serial = Race(claim);
         new SerialRunner<bool>(hearing, serial).Run(rng => rng.NextDouble() < truth);
 
@@ -50,7 +50,7 @@ public class ParallelRunnerTests
     public async Task A_trial_that_throws_surfaces_only_before_the_verdict(long throwing, bool surfaces)
     {
         var claim = Claim.RateAtMost(0, defect: 0.001).InParallel(2);
-        var hearing = Hearing.Of(claim, new Site("", "", "", 0, CanReplay: true));
+        var hearing = Hearing.Of(claim, new Site("", "", "", 0, Replay.Trial));
         double poison = TrialRandom.At(hearing.Stream, throwing).NextDouble();
         var race = Race(claim);
         Task Running() => new ParallelRunner<bool>(hearing, race, 4096).RunAsync(rng =>
