@@ -12,6 +12,8 @@ sealed class FixedRate(RatePlan plan, RateLimits limits) : IRace<bool>
         : limits.Accept(_successes) ? Assize.Outcome.Upheld
         : Assize.Outcome.Refuted;
 
+    public long Quiet => limits.Trials - _trials;
+
     public void Add(bool draw) => Add([draw]);
 
     public void Add(ReadOnlySpan<bool> draws)

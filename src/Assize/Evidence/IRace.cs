@@ -6,6 +6,9 @@ interface IRace<TDraw>
     /// <summary>The verdict; null while more draws are wanted.</summary>
     Outcome? Outcome { get; }
 
+    /// <summary>How many trials it takes at least to the verdict, 1 or more: blocks of so many are asked for.</summary>
+    long Quiet => 1;
+
     /// <summary>Takes the draw of the next trial; not to be called after the verdict.</summary>
     void Add(TDraw draw);
 

@@ -40,6 +40,8 @@ sealed class RateRace : IRace<bool>
 
     public Outcome? Outcome { get; private set; }
 
+    public long Quiet => _nextLook - _trials;
+
     public void Add(bool draw)
     {
         if (draw)

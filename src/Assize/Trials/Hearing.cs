@@ -41,7 +41,7 @@ sealed class Hearing
         if (Claim.Terms.Threads == 1)
             new SerialRunner<TDraw>(this, race).Run(trial);
         else
-            new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(random => new(trial(random))).GetAwaiter().GetResult();
+            new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).Run(trial);
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
@@ -55,7 +55,7 @@ sealed class Hearing
         if (Claim.Terms.Threads == 1)
             await new SerialRunner<TDraw>(this, race).RunAsync(trial).ConfigureAwait(false);
         else
-            await new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(random => new(trial(random))).ConfigureAwait(false);
+            await new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(trial).ConfigureAwait(false);
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 

@@ -4,37 +4,60 @@ namespace Assize;
 /// order.</summary>
 /// <remarks>The block is fixed by a test; otherwise it grows with the trials, so that few are drawn beyond the
 /// verdict.</remarks>
-sealed class ParallelRunner<TDraw>(Hearing hearing, IRace<TDraw> race, int? block = null)
+sealed class ParallelRunner<TDraw>
 {
     const long FirstBlock = 8;
     const long LargestBlock = 4096;
     const int Growth = 4;
 
-    readonly TrialClock _clock = new(hearing.Claim.Terms);
+    readonly IRace<TDraw> _race;
+    readonly int? _block;
+    readonly TrialClock _clock;
+    readonly TrialWorker<TDraw>[] _workers;
+    long _next = 1;
 
-    readonly TrialWorker<TDraw>[] _workers =
-        [.. Enumerable.Range(0, hearing.Claim.Terms.Threads).Select(_ => new TrialWorker<TDraw>(hearing.Stream))];
-
-    public async Task RunAsync(Func<Random, ValueTask<TDraw>> trial)
+    public ParallelRunner(Hearing hearing, IRace<TDraw> race, int? block = null)
     {
-        for (long next = 1; race.Outcome is null && !_clock.IsOver();)
+        (_race, _block, _clock) = (race, block, new TrialClock(hearing.Claim.Terms));
+        _workers =
+            [.. Enumerable.Range(0, hearing.Claim.Terms.Threads).Select(_ => new TrialWorker<TDraw>(hearing, _clock))];
+    }
+
+    int Block => _block ?? (int)Math.Clamp(_next / _workers.Length / Growth, FirstBlock, LargestBlock);
+
+    public void Run(Func<Random, TDraw> trial)
+    {
+        while (_race.Outcome is null && !_clock.IsOver())
         {
-            int size = block ?? (int)Math.Clamp(next / _workers.Length / Growth, FirstBlock, LargestBlock);
-            long first = next;
-            await Task.WhenAll(_workers.Select((worker, i) =>
-                Task.Run(() => worker.RunAsync(trial, first + (long)i * size, size)))).ConfigureAwait(false);
-            foreach (var worker in _workers)
-                Fold(worker);
-            next += (long)_workers.Length * size;
+            var (first, size) = (_next, Block);
+            var others = Enumerable.Range(1, _workers.Length - 1)
+                .Select(i => Task.Run(() => _workers[i].Run(trial, first + (long)i * size, size))).ToArray();
+            _workers[0].Run(trial, first, size);
+            Task.WaitAll(others);
+            Fold(size);
         }
     }
 
-    // A trial that threw matters only if the race is undecided after the one before it.
-    void Fold(TrialWorker<TDraw> worker)
+    public async Task RunAsync(Func<Random, Task<TDraw>> trial)
     {
-        if (race.Outcome is null)
-            race.Add(worker.Draws);
-        if (race.Outcome is null && worker.Failure is { } cause)
-            throw _clock.IsStopping(cause) ? cause : hearing.Failed(worker.FailedTrial, cause);
+        while (_race.Outcome is null && !_clock.IsOver())
+        {
+            var (first, size) = (_next, Block);
+            await Task.WhenAll(_workers.Select((worker, i) =>
+                Task.Run(() => worker.RunAsync(trial, first + (long)i * size, size)))).ConfigureAwait(false);
+            Fold(size);
+        }
+    }
+
+    // Draws after a gap that the clock left are not of the next trials.
+    void Fold(int size)
+    {
+        foreach (var worker in _workers)
+        {
+            worker.Fold(_race, _next);
+            _next += worker.Count;
+            if (worker.Count < size)
+                break;
+        }
     }
 }

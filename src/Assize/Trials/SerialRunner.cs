@@ -1,46 +1,45 @@
 namespace Assize;
 
-/// <summary>Runs one trial after another: nothing is drawn beyond the verdict.</summary>
-sealed class SerialRunner<TDraw>(Hearing hearing, IRace<TDraw> race)
+/// <summary>Runs one trial after another: nothing is drawn beyond the verdict, since only the last trial of a block may
+/// bring it.</summary>
+sealed class SerialRunner<TDraw>
 {
-    readonly TrialClock _clock = new(hearing.Claim.Terms);
-    readonly TrialRandom _random = new();
+    const long LargestBlock = 1024;
+
+    readonly IRace<TDraw> _race;
+    readonly TrialClock _clock;
+    readonly TrialWorker<TDraw> _worker;
+    long _next = 1;
+
+    public SerialRunner(Hearing hearing, IRace<TDraw> race)
+    {
+        (_race, _clock) = (race, new TrialClock(hearing.Claim.Terms));
+        _worker = new TrialWorker<TDraw>(hearing, _clock);
+    }
+
+    int Block => (int)Math.Min(_race.Quiet, LargestBlock);
 
     public void Run(Func<Random, TDraw> trial)
     {
-        for (long number = 1; race.Outcome is null && !_clock.IsOver(); number++)
+        while (_race.Outcome is null && !_clock.IsOver())
         {
-            TDraw draw;
-            try
-            {
-                _random.Start(hearing.Stream, number);
-                draw = trial(_random);
-            }
-            catch (Exception cause) when (!_clock.IsStopping(cause))
-            {
-                throw hearing.Failed(number, cause);
-            }
-
-            race.Add(draw);
+            _worker.Run(trial, _next, Block);
+            Fold();
         }
     }
 
     public async Task RunAsync(Func<Random, Task<TDraw>> trial)
     {
-        for (long number = 1; race.Outcome is null && !_clock.IsOver(); number++)
+        while (_race.Outcome is null && !_clock.IsOver())
         {
-            TDraw draw;
-            try
-            {
-                _random.Start(hearing.Stream, number);
-                draw = await trial(_random).ConfigureAwait(false);
-            }
-            catch (Exception cause) when (!_clock.IsStopping(cause))
-            {
-                throw hearing.Failed(number, cause);
-            }
-
-            race.Add(draw);
+            await _worker.RunAsync(trial, _next, Block).ConfigureAwait(false);
+            Fold();
         }
+    }
+
+    void Fold()
+    {
+        _worker.Fold(_race, _next);
+        _next += _worker.Count;
     }
 }

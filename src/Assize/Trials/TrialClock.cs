@@ -7,6 +7,11 @@ sealed class TrialClock(Terms terms)
         ? Environment.TickCount64 + (long)Math.Min(cap.TotalMilliseconds, long.MaxValue / 2)
         : long.MaxValue;
 
+    readonly bool _canEnd = terms.TimeCap is not null || terms.Stop.CanBeCanceled;
+
+    /// <summary>Whether no further trial may begin.</summary>
+    public bool MustEnd => _canEnd && (terms.Stop.IsCancellationRequested || Environment.TickCount64 >= _end);
+
     /// <summary>Whether the time cap has passed.</summary>
     /// <exception cref="OperationCanceledException">The token is cancelled.</exception>
     public bool IsOver()

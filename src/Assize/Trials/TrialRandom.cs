@@ -1,4 +1,5 @@
 using System.Buffers.Binary;
+using System.Runtime.CompilerServices;
 
 namespace Assize;
 
@@ -6,11 +7,22 @@ namespace Assize;
 /// <remarks>Every virtual member is overridden, so that nothing comes from the framework's own generators.</remarks>
 sealed class TrialRandom : Random
 {
+    // One array, so that no trial stores a reference: the first blocks of trials ahead, then later blocks of one trial.
+    const int Later = 128;
+    const int FewBlocks = 8;
+    const int ManyBlocks = 16;
+    const int MostEach = 4;
+
+    readonly ulong[] _words = new ulong[Later + 2 * ManyBlocks];
+    int _each = 1;
+    int _wanting;
     ulong _key;
+    ulong _firstAhead;
+    ulong _aheads;
     ulong _trial;
     ulong _block;
-    ulong _second;
-    bool _hasSecond;
+    int _at;
+    int _end;
 
     // The golden ratio in 64 bits: any other key gives another stream.
     const ulong OtherStream = 0x9E3779B97F4A7C15;
@@ -35,7 +47,15 @@ sealed class TrialRandom : Random
     }
 
     /// <summary>Sets the generator to the beginning of a trial.</summary>
-    public void Start(ulong key, long trial) => (_key, _trial, _block, _hasSecond) = (key, (ulong)trial, 0, false);
+    public void Start(ulong key, long trial)
+    {
+        ulong place = (ulong)trial - _firstAhead;
+        if (place >= _aheads || key != _key)
+            place = LookAhead(key, (ulong)trial);
+        _trial = (ulong)trial;
+        _at = 2 * _each * (int)place;
+        _end = _at + 2 * _each;
+    }
 
     public override int Next() => (int)NextBelow(int.MaxValue);
 
@@ -107,15 +127,36 @@ sealed class TrialRandom : Random
 
     ulong NextWord()
     {
-        if (_hasSecond)
-        {
-            _hasSecond = false;
-            return _second;
-        }
+        int at = _at;
+        if (at == _end)
+            return LaterWord();
 
-        var (a, b, c, d) = Philox.Block(_key, _trial, _block++);
-        _second = (ulong)d << 32 | c;
-        _hasSecond = true;
-        return (ulong)b << 32 | a;
+        _at = at + 1;
+        return _words[at];
+    }
+
+    // Trials come in order; what those before have drawn decides how many blocks of each are made ahead.
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    ulong LookAhead(ulong key, ulong trial)
+    {
+        if (_wanting > (int)_aheads / 2 && _each < MostEach)
+            _each *= 2;
+        (_key, _firstAhead, _aheads, _wanting) = (key, trial, (ulong)(Later / (2 * _each)), 0);
+        Philox.FillTrials(key, trial, _each, _words.AsSpan(0, Later));
+        return 0;
+    }
+
+    // A trial that has used up a few blocks may well use many.
+    [MethodImpl(MethodImplOptions.NoInlining)]
+    ulong LaterWord()
+    {
+        bool isFirstTime = _end <= Later;
+        int blocks = isFirstTime ? FewBlocks : ManyBlocks;
+        if (isFirstTime)
+            (_block, _wanting) = ((ulong)_each, _wanting + 1);
+        Philox.FillBlocks(_key, _trial, _block, _words.AsSpan(Later, 2 * blocks));
+        _block += (ulong)blocks;
+        (_at, _end) = (Later + 1, Later + 2 * blocks);
+        return _words[Later];
     }
 }

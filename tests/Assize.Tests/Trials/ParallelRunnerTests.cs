@@ -32,12 +32,12 @@ public class ParallelRunnerTests
         var seen = new ConcurrentDictionary<int, bool>();
         int arrived = 0;
         using var both = new Barrier(2);
-        new ParallelRunner<bool>(hearing, race, block).RunAsync(rng =>
+        new ParallelRunner<bool>(hearing, race, block).Run(rng =>
         {
             if (seen.TryAdd(Environment.CurrentManagedThreadId, true) && Interlocked.Increment(ref arrived) <= 2)
                 both.SignalAndWait(TimeSpan.FromSeconds(30));
-            return new(rng.NextDouble() < truth);
-        }).GetAwaiter().GetResult();
+            return rng.NextDouble() < truth;
+        });
         return seen.Count;
     }
 
@@ -47,19 +47,19 @@ public class ParallelRunnerTests
     [Theory]
     [InlineData(6_905, true)]
     [InlineData(6_906, false)]
-    public async Task A_trial_that_throws_surfaces_only_before_the_verdict(long throwing, bool surfaces)
+    public void A_trial_that_throws_surfaces_only_before_the_verdict(long throwing, bool surfaces)
     {
         var claim = Claim.RateAtMost(0, defect: 0.001).InParallel(2);
         var hearing = Hearing.Of(claim, new Site("", "", "", 0, Replay.Trial));
         double poison = TrialRandom.At(hearing.Stream, throwing).NextDouble();
         var race = Race(claim);
-        Task Running() => new ParallelRunner<bool>(hearing, race, 4096).RunAsync(rng =>
-            rng.NextDouble() == poison ? throw new InvalidOperationException("poison") : new(false));
+        void Running() => new ParallelRunner<bool>(hearing, race, 4096).Run(rng =>
+            rng.NextDouble() == poison ? throw new InvalidOperationException("poison") : false);
 
         if (surfaces)
-            Assert.Equal(throwing, (await Assert.ThrowsAsync<TrialFailedException>(Running)).Trial);
+            Assert.Equal(throwing, Assert.Throws<TrialFailedException>(Running).Trial);
         else
-            await Running();
+            Running();
         Assert.Equal(surfaces ? null : Outcome.Upheld, race.Outcome);
     }
 }

@@ -42,6 +42,35 @@ public class TrialRandomTests
             + $"{random.NextInt64(-9, 9)} {random.NextDouble():R} {random.NextSingle():R} {Convert.ToHexString(bytes)} {string.Join(',', items)}";
     }
 
+    // The contract of a replay: word w of a trial is half of block w / 2 of its counter, however far one reads and whatever
+    // the trials before have drawn.
+    [Theory]
+    [InlineData(1, 1), InlineData(1, 2), InlineData(33, 3), InlineData(1_000_000_000_000, 9), InlineData(7, 200)]
+    public void A_trials_numbers_are_the_blocks_of_its_counter_in_order(long trial, int drawn)
+    {
+        const ulong key = 0xa4093822299f31d0;
+        var random = new TrialRandom();
+        for (long before = Math.Max(1, trial - 300); before < trial + 300; before++)
+        {
+            random.Start(key, before);
+            for (int i = 0; i < drawn; i++)
+                Assert.Equal(Word(key, before, i), Word(random));
+        }
+    }
+
+    static ulong Word(ulong key, long trial, int word)
+    {
+        var (a, b, c, d) = Philox.Block(key, (ulong)trial, (ulong)word / 2);
+        return word % 2 == 0 ? (ulong)b << 32 | a : (ulong)d << 32 | c;
+    }
+
+    static ulong Word(Random random)
+    {
+        byte[] bytes = new byte[8];
+        random.NextBytes(bytes);
+        return BitConverter.ToUInt64(bytes);
+    }
+
     [Fact]
     public void Bounded_numbers_stay_in_their_bounds_and_reach_both_ends()
     {
