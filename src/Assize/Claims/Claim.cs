@@ -11,10 +11,10 @@ public abstract partial record Claim
 
     internal Terms Terms { get; init; } = new();
 
-    /// <summary>The probability of a false failure allowed in one run, in (0, 1). Default: 1e-9.</summary>
+    /// <summary>The probability of a false failure allowed in one run, in (0, 1). Default: the suite's, else 1e-9.</summary>
     public double Risk => Terms.Risk;
 
-    /// <summary>One minus the probability of a missed defect allowed, in (0, 1). Default: 0.999.</summary>
+    /// <summary>One minus the probability of a missed defect allowed, in (0, 1). Default: the suite's, else 0.999.</summary>
     public double Confidence => Terms.Confidence;
 
     /// <summary>The name given by the author; null when history and stream follow the test's name.</summary>

@@ -1,13 +1,11 @@
-using Assize.Bounds;
-
 namespace Assize;
 
 /// <summary>How a claim is to be judged, whatever it claims.</summary>
 sealed record Terms
 {
-    public double Risk { get; init; } = UsualTerms.Risk;
+    public double Risk { get; init; } = SuiteTerms.Risk;
 
-    public double Confidence { get; init; } = UsualTerms.Confidence;
+    public double Confidence { get; init; } = SuiteTerms.Confidence;
 
     public long? Trials { get; init; }
 

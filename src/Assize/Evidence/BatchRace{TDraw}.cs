@@ -9,6 +9,8 @@ sealed class BatchRace<TDraw>(IRace<TDraw> race, int size) : IRace<TDraw[]>, IBa
 
     public Outcome? Outcome => race.Outcome;
 
+    public long Quiet => Math.Max(1, race.Quiet / size);
+
     public void Add(TDraw[] draw) => race.Add(draw);
 
     public void Add(ReadOnlySpan<TDraw[]> draws)

@@ -6,6 +6,8 @@ sealed class MappedRace<TDraw, TInner>(IRace<TInner> race, Func<TDraw, TInner> m
 {
     public Outcome? Outcome => race.Outcome;
 
+    public long Quiet => race.Quiet;
+
     public void Add(TDraw draw) => race.Add(map(draw));
 
     public void Add(ReadOnlySpan<TDraw> draws)

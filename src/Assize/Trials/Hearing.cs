@@ -38,10 +38,11 @@ sealed class Hearing
 
         var race = start();
         var clock = Stopwatch.StartNew();
+        using var progress = Progress(race);
         if (Claim.Terms.Threads == 1)
-            new SerialRunner<TDraw>(this, race).Run(trial);
+            new SerialRunner<TDraw>(this, race, progress).Run(trial);
         else
-            new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).Run(trial);
+            new ParallelRunner<TDraw>(this, race, progress, (race as IBatched)?.Block).Run(trial);
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
@@ -52,10 +53,11 @@ sealed class Hearing
 
         var race = start();
         var clock = Stopwatch.StartNew();
+        using var progress = Progress(race);
         if (Claim.Terms.Threads == 1)
-            await new SerialRunner<TDraw>(this, race).RunAsync(trial).ConfigureAwait(false);
+            await new SerialRunner<TDraw>(this, race, progress).RunAsync(trial).ConfigureAwait(false);
         else
-            await new ParallelRunner<TDraw>(this, race, (race as IBatched)?.Block).RunAsync(trial).ConfigureAwait(false);
+            await new ParallelRunner<TDraw>(this, race, progress, (race as IBatched)?.Block).RunAsync(trial).ConfigureAwait(false);
         return Decided(race.Report(), race.Outcome, clock.Elapsed);
     }
 
@@ -74,7 +76,7 @@ sealed class Hearing
     {
         RequireNoOnlyTrial();
         var (clock, trials) = (Stopwatch.StartNew(), 0L);
-        var end = new TrialClock(Claim.Terms);
+        using var end = Progress(race);
         using var draws = sample.GetEnumerator();
         for (; race.Outcome is null && !end.IsOver() && draws.MoveNext(); trials++)
             race.Add(draws.Current);
@@ -86,7 +88,7 @@ sealed class Hearing
     {
         RequireNoOnlyTrial();
         var (clock, trials) = (Stopwatch.StartNew(), 0L);
-        var end = new TrialClock(Claim.Terms);
+        using var end = Progress(race);
         var draws = sample.GetAsyncEnumerator(Claim.Terms.Stop);
         await using (draws.ConfigureAwait(false))
         {
@@ -131,6 +133,9 @@ sealed class Hearing
     // One trial decides nothing: the test must not pass by it.
     static ClaimRefusedException Alone<TDraw>(ReplayKey key, TDraw draw) =>
         new(VerdictText.OfOnlyTrial(key, draw?.ToString()));
+
+    TrialClock Progress<TDraw>(IRace<TDraw> race) =>
+        new(Claim.Terms, () => Host.Write(VerdictText.Progress(Claim, race.Report())));
 
     Verdict Decided(RaceReport report, Outcome? outcome, TimeSpan elapsed)
     {

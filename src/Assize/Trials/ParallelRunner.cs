@@ -16,9 +16,9 @@ sealed class ParallelRunner<TDraw>
     readonly TrialWorker<TDraw>[] _workers;
     long _next = 1;
 
-    public ParallelRunner(Hearing hearing, IRace<TDraw> race, int? block = null)
+    public ParallelRunner(Hearing hearing, IRace<TDraw> race, TrialClock clock, int? block = null)
     {
-        (_race, _block, _clock) = (race, block, new TrialClock(hearing.Claim.Terms));
+        (_race, _block, _clock) = (race, block, clock);
         _workers =
             [.. Enumerable.Range(0, hearing.Claim.Terms.Threads).Select(_ => new TrialWorker<TDraw>(hearing, _clock))];
     }

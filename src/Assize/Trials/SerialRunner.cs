@@ -11,9 +11,9 @@ sealed class SerialRunner<TDraw>
     readonly TrialWorker<TDraw> _worker;
     long _next = 1;
 
-    public SerialRunner(Hearing hearing, IRace<TDraw> race)
+    public SerialRunner(Hearing hearing, IRace<TDraw> race, TrialClock clock)
     {
-        (_race, _clock) = (race, new TrialClock(hearing.Claim.Terms));
+        (_race, _clock) = (race, clock);
         _worker = new TrialWorker<TDraw>(hearing, _clock);
     }
 

@@ -20,6 +20,10 @@ static class VerdictText
     public static string Line(Verdict verdict) => $"{verdict.Outcome} in {Wording.Trials(verdict.Trials)}: "
         + $"{verdict.Claim.Sentence}; observed {Observed(verdict)}; seed {RunSeed.Text(verdict.Seed)}";
 
+    /// <summary>One line for the test's output while trials still run.</summary>
+    public static string Progress(Claim claim, RaceReport report) =>
+        $"Running: {Wording.Number(report.Trials)} of {Wording.Trials(report.Cap)} at most; {claim.Sentence}";
+
     public static string OfFailedTrial(Exception cause, long trial, string? replayKey) =>
         $"{cause.Message}\n\nThis is trial {Wording.Number(trial)}: it threw {cause.GetType().Name} before the claim was decided.\n"
         + (replayKey is null

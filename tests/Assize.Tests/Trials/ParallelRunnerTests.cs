@@ -14,7 +14,7 @@ public class ParallelRunnerTests
         var claim = Claim.Rate(target, tolerance: 0.01).InParallel(2);
         var hearing = Hearing.Of(claim, new Site("", "", "", 0, Replay.Trial));
         var serial = Race(claim);
-        new SerialRunner<bool>(hearing, serial).Run(rng => rng.NextDouble() < truth);
+        new SerialRunner<bool>(hearing, serial, new TrialClock(claim.Terms)).Run(rng => rng.NextDouble() < truth);
 
         foreach (int block in (int[])[1, 7, 4096])
         {
@@ -32,7 +32,7 @@ public class ParallelRunnerTests
         var seen = new ConcurrentDictionary<int, bool>();
         int arrived = 0;
         using var both = new Barrier(2);
-        new ParallelRunner<bool>(hearing, race, block).Run(rng =>
+        new ParallelRunner<bool>(hearing, race, new TrialClock(hearing.Claim.Terms), block).Run(rng =>
         {
             if (seen.TryAdd(Environment.CurrentManagedThreadId, true) && Interlocked.Increment(ref arrived) <= 2)
                 both.SignalAndWait(TimeSpan.FromSeconds(30));
@@ -53,7 +53,7 @@ public class ParallelRunnerTests
         var hearing = Hearing.Of(claim, new Site("", "", "", 0, Replay.Trial));
         double poison = TrialRandom.At(hearing.Stream, throwing).NextDouble();
         var race = Race(claim);
-        void Running() => new ParallelRunner<bool>(hearing, race, 4096).Run(rng =>
+        void Running() => new ParallelRunner<bool>(hearing, race, new TrialClock(hearing.Claim.Terms), 4096).Run(rng =>
             rng.NextDouble() == poison ? throw new InvalidOperationException("poison") : false);
 
         if (surfaces)
