@@ -19,6 +19,13 @@ static class Check
             throw new ArgumentOutOfRangeException(name, value, $"must lie in ({Text(lower)}, {Text(upper)}).");
     }
 
+    // Below 1e-300 a relative error means nothing.
+    public static void Risk(double value, string name)
+    {
+        if (!(value >= 1e-300 && value < 1))
+            throw new ArgumentOutOfRangeException(name, value, "must lie in [1e-300, 1).");
+    }
+
     public static void Finite(double value, string name) => Between(value, double.MinValue, double.MaxValue, name);
 
     public static void AtLeast(long value, long least, string name)

@@ -23,14 +23,17 @@ public sealed record Enclosure
     /// <summary>The most the probability can be, in [0, 1]; 1 where nothing better is known.</summary>
     public double Upper { get; }
 
-    // Above the error of a divergence or a square, of the exponential and of a few products.
+    // Above the error of the exponential and of a few products.
     internal const double Rounding = 1e-12;
 
-    /// <summary>[0, probability], rounded up; the probability is known to a relative 1e-12 or better.</summary>
+    // Above the error of a divergence, 2e-15, and of a few products: 7e-12 of the probability at e^-690.
+    const double ExponentRounding = 1e-14;
+
+    /// <summary>[0, probability], rounded up; the probability is known to a relative 9e-13 or better.</summary>
     internal static Enclosure UpTo(double probability) =>
         new(0, Math.Min(1, Math.Max(1e-300, probability * (1 + Rounding))));
 
-    /// <summary>[0, e^-exponent], rounded up; the exponent is known to a relative 1e-13 or better.</summary>
+    /// <summary>[0, e^-exponent], rounded up; the exponent is known to a relative 9e-15 or better.</summary>
     internal static Enclosure UpToExponential(double exponent) =>
-        exponent > 0 ? UpTo(Elementary.Exp(-exponent * (1 - Rounding))) : new(0, 1);
+        exponent > 0 ? UpTo(Elementary.Exp(-exponent * (1 - ExponentRounding))) : new(0, 1);
 }

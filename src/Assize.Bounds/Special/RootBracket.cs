@@ -48,6 +48,16 @@ public static class RootBracket
             $"The bracket [{Check.Text(lower)}, {Check.Text(upper)}] did not close in {Cap} steps.");
     }
 
+    /// <summary>Where a falling function stops being positive, rounded up; at the greatest point it is not.</summary>
+    internal static double Descent(Func<double, double> function, double greatest, double precision)
+    {
+        double least = greatest / 2;
+        while (least > 0 && function(least) <= 0)
+            (least, greatest) = (least / 16, least);
+
+        return least > 0 ? Find(function, least, greatest, precision).Upper : greatest;
+    }
+
     // The secant's root, kept half a precision away from the ends so that the bracket closes from both sides.
     static double Inside(double lower, double upper, double atLower, double atUpper, double precision)
     {

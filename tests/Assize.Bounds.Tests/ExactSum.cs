@@ -1,0 +1,46 @@
+using System.Numerics;
+
+namespace Assize.Bounds.Tests;
+
+/// <summary>Sums of draws on 0, 1, 2, … with whole weights: every probability is a whole number over a power.</summary>
+sealed class ExactSum
+{
+    readonly BigInteger[] _atLeast;
+
+    public ExactSum(int[] weights, int trials)
+    {
+        BigInteger[] ways = [1];
+        for (int i = 0; i < trials; i++)
+            ways = Plus(ways, weights);
+
+        _atLeast = new BigInteger[ways.Length + 1];
+        for (int total = ways.Length - 1; total >= 0; total--)
+            _atLeast[total] = _atLeast[total + 1] + ways[total];
+    }
+
+    public int Greatest => _atLeast.Length - 2;
+
+    /// <summary>The sign of P(S ≥ total) minus a probability, without rounding.</summary>
+    public int CompareAtLeast(int total, double probability)
+    {
+        int exponent = 0;
+        while (Math.Floor(probability) != probability)
+            (probability, exponent) = (probability * 2, exponent + 1);
+
+        return (_atLeast[total] << exponent).CompareTo(new BigInteger(probability) * _atLeast[0]);
+    }
+
+    public double AtLeast(int total) => Math.Exp(BigInteger.Log(_atLeast[total]) - BigInteger.Log(_atLeast[0]));
+
+    static BigInteger[] Plus(BigInteger[] ways, int[] weights)
+    {
+        var sum = new BigInteger[ways.Length + weights.Length - 1];
+        for (int i = 0; i < ways.Length; i++)
+        {
+            for (int j = 0; j < weights.Length; j++)
+                sum[i + j] += ways[i] * weights[j];
+        }
+
+        return sum;
+    }
+}

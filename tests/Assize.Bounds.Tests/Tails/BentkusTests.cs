@@ -1,0 +1,189 @@
+using System.Globalization;
+using Assize.Testing;
+
+namespace Assize.Bounds.Tests;
+
+public class BentkusTests
+{
+    // The accuracy its page states.
+    const double Accuracy = 1e-11;
+
+    [Fact]
+    public void It_is_at_least_the_exact_tail_and_reached_by_two_values()
+    {
+        int seen = 0;
+        double least = double.MaxValue;
+        foreach (var item in LatticeCase.Every())
+        {
+            double total = item.Total / (double)item.Top * (1 - 1e-15);
+            double mean = item.Mean / item.Top * (1 + 1e-15);
+            double above = Bentkus.UpperTail(item.Trials, total, mean).Upper;
+            double below = Bentkus.LowerTail(item.Trials, (item.Trials - total) * (1 + 1e-15), 1 - mean).Upper;
+            item.AssertCovered(above);
+            item.AssertCovered(below);
+            item.AssertCovered(Bentkus.Tail(item.Trials, item.Mean / item.Top, item.Margin / item.Top).Upper);
+            least = Math.Min(least, above / item.Probability);
+            if (item.Top == 1)
+                Assert.True(above <= Math.E * item.Probability, $"{item}: {above}");
+            seen++;
+        }
+
+        Assert.True(seen > 10_000, $"only {seen} cases");
+        Assert.InRange(least, 1, 1 + 1e-11);
+    }
+
+    [Fact]
+    public void It_agrees_with_whole_numbers_and_sixty_digits()
+    {
+        int seen = 0;
+        double worst = 0;
+        foreach (var row in ReferenceTable.Rows("bentkus"))
+        {
+            var (trials, mean, margin) = (row.Whole("n"), row.Number("mean"), row.Number("margin"));
+            worst = Math.Max(worst, Error(row, "ln_upper", Bentkus.Tail(trials, mean, margin)));
+            seen++;
+            if (!row.Has("ln_lower") || trials > 1_000)
+                continue;
+
+            // The total is rounded here, the table's is not.
+            Assert.InRange(
+                Error(row, "ln_lower", Bentkus.LowerTail(trials, trials * (mean - margin), mean), 1e-9), -1e-9, 1e-9);
+            seen++;
+        }
+
+        Assert.Equal(130, seen);
+        Assert.True(worst is > 1e-13 and <= Accuracy, $"{worst}");
+    }
+
+    static double Error(ReferenceTable.Row row, string column, Enclosure tail, double below = 2e-13)
+    {
+        double error = Math.Log(tail.Upper) - Math.Min(0, Math.Max(-690.7755278982137, row.Number(column)));
+        Assert.True(error >= -below, $"{row}: {error:E2}");
+        Assert.True(error <= 1e-9, $"{row}: {error:E2}");
+        return error;
+    }
+
+    // Trials for both sides, margins 0.01 and 0.005 about a mean of 1/2; computed elsewhere.
+    [Theory]
+    [InlineData(0.01, 1e-2, 20_908)]
+    [InlineData(0.01, 1e-4, 42_463)]
+    [InlineData(0.01, 1e-6, 64_557)]
+    [InlineData(0.01, 1e-9, 98_130)]
+    [InlineData(0.005, 1e-2, 83_633)]
+    [InlineData(0.005, 1e-4, 169_858)]
+    [InlineData(0.005, 1e-6, 258_238)]
+    [InlineData(0.005, 1e-9, 392_535)]
+    public void Trials_needed_are_the_first_that_suffice(double margin, double risk, long trials)
+    {
+        Assert.Equal(trials, Bentkus.TrialsNeeded(0.5, margin, risk / 2));
+        Assert.True(Bentkus.Tail(trials, 0.5, margin).Upper <= risk / 2);
+        Assert.True(Bentkus.Tail(trials - 1, 0.5, margin).Upper > risk / 2);
+    }
+
+    // Both tails of a rate of 0.01 together, margin 0.005; computed elsewhere.
+    [Theory]
+    [InlineData(1e-2, 3_346)]
+    [InlineData(1e-4, 7_132)]
+    [InlineData(1e-6, 11_132)]
+    [InlineData(1e-9, 17_261)]
+    public void Both_tails_of_a_small_rate_take_the_published_trials(double risk, long trials)
+    {
+        double Both(long n) => Bentkus.Tail(n, 0.01, 0.005).Upper + Bentkus.LowerTail(n, n * 0.005, 0.01).Upper;
+
+        Assert.True(Both(trials) <= risk, $"{Both(trials)}");
+        Assert.True(Both(trials - 1) > risk, $"{Both(trials - 1)}");
+    }
+
+    [Fact]
+    public void More_trials_or_margin_never_raise_it()
+    {
+        int seen = 0;
+        foreach (double mean in new[] { 0.5, 0.1, 1e-3, 0.97, 1e-9 })
+        {
+            for (long trials = 1; trials < 3_000; trials += 1 + trials / 9)
+            {
+                for (double margin = 1 - mean; margin > 1e-4; margin *= 0.71)
+                {
+                    double here = Bentkus.Tail(trials, mean, margin).Upper;
+                    double slack = here * (1 + 2 * Accuracy);
+                    Assert.True(Bentkus.Tail(trials + 1, mean, margin).Upper <= slack, $"{trials} {mean} {margin}");
+                    Assert.True(Bentkus.Tail(trials, mean, margin * 0.97).Upper * (1 + 2 * Accuracy) >= here);
+                    seen++;
+                }
+            }
+        }
+
+        Assert.True(seen > 4_000, $"only {seen} cases");
+    }
+
+    [Theory]
+    [InlineData(100, 0.5, 1e-3)]
+    [InlineData(100, 0.5, 0.4)]
+    [InlineData(10_000, 1e-4, 1e-9)]
+    [InlineData(1_000_000, 0.3, 1e-300)]
+    [InlineData(1_000_000_000, 0.5, 1e-9)]
+    [InlineData(1_000_000_000, 1e-300, 1e-9)]
+    public void The_radius_undoes_the_tail_on_the_safe_side(long trials, double mean, double risk)
+    {
+        double radius = Bentkus.Radius(trials, mean, risk);
+
+        Assert.True(Bentkus.Tail(trials, mean, radius).Upper <= risk);
+        Assert.True(Bentkus.Tail(trials, mean, radius * (1 - 1e-11)).Upper > risk);
+    }
+
+    [Fact]
+    public void At_the_ends_of_the_range_it_is_the_probability()
+    {
+        Assert.Equal(0.5, Bentkus.Radius(3, 0.5, 0.1));
+        Assert.Equal((0, 0), (Bentkus.Radius(5, 0, 0.1), Bentkus.Radius(5, 1, 0.1)));
+        Assert.Equal(0.125, Bentkus.UpperTail(3, 3, 0.5).Upper, 1e-12);
+        Assert.Equal(0.125, Bentkus.LowerTail(3, 0, 0.5).Upper, 1e-12);
+        Assert.Equal((1, 0, 0), (Bentkus.UpperTail(3, 1.5, 0.5).Upper, Bentkus.UpperTail(3, 1, 0).Upper,
+            Bentkus.Tail(3, 0.5, 0.51).Upper));
+        Assert.Equal((1, 0), (Bentkus.UpperTail(3, 3, 1).Upper, Bentkus.LowerTail(3, 2, 1).Upper));
+        Assert.InRange(Bentkus.Tail(1_000_000_000, 0.5, 0.5).Upper, 1e-300, 1e-300);
+        Assert.InRange(Bentkus.UpperTail(1_000_000_000, 1, 1e-300).Upper, 1e-291, 1.0001e-291);
+        Assert.Equal(1e-3, Bentkus.LowerTail(1_000_000_000, 999_999_999, 1 - 1e-12).Upper, 1e-3);
+    }
+
+    [Fact]
+    public void Its_page_states_how_far_above_the_exact_tail_it_is()
+    {
+        var text = new System.Text.StringBuilder(
+            "| trials | rate | successes | exact | bound | ratio | Hoeffding |\n| --: | --: | --: | --: | --: | --: | --: |\n");
+        foreach (var (trials, rate, successes) in new[]
+            { (100, 0.5, 65), (10_000, 0.5, 5_300), (10_000, 0.01, 160), (1_000_000, 0.01, 10_600) })
+        {
+            double exact = BinomialTail.UpperTail(trials, successes, rate).Upper;
+            double bound = Bentkus.UpperTail(trials, successes, rate).Upper;
+            double hoeffding = Hoeffding.UpperTail(trials, successes / (double)trials, rate).Upper;
+            text.Append(CultureInfo.InvariantCulture,
+                $"| {trials:N0} | {rate} | {successes:N0} | {exact:0.00e+0} | {bound:0.00e+0} | {bound / exact:0.00} | {hoeffding / exact:0.0} |\n");
+        }
+
+        Repository.MustContain("src/docs/tails/Bentkus.md", "measured", text.ToString());
+    }
+
+    [Fact]
+    public void A_margin_that_takes_too_many_trials_has_no_number() =>
+        Assert.Null(Bentkus.TrialsNeeded(0.5, 1e-5, 1e-12));
+
+    [Fact]
+    public void Arguments_outside_the_domain_are_refused()
+    {
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.UpperTail(0, 0, 0.5));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.UpperTail(1_000_000_001, 5, 0.5));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.UpperTail(5, 5.1, 0.5));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.UpperTail(5, -0.1, 0.5));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.UpperTail(5, double.NaN, 0.5));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.LowerTail(5, 3, 1.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.LowerTail(5, 3, double.NaN));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.Tail(5, 0.5, 1.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.Tail(5, 0.5, double.NaN));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.Radius(5, 0.5, 1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.Radius(5, 0.5, 9e-301));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.TrialsNeeded(0.5, 0.6, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.TrialsNeeded(0.5, 0, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Bentkus.TrialsNeeded(0.5, 0.1, double.NaN));
+    }
+}
