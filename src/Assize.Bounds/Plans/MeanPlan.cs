@@ -213,12 +213,14 @@ public sealed class MeanPlan
 
     string Best(Func<MeanTheorem, double> bound) => _applicable.OrderBy(bound).First().Name;
 
+    // Without "yield", whose state machine asks for the current thread.
     IEnumerable<TheoremTrials> Alone(CatoniPlan? catoni)
     {
-        foreach (var theorem in _applicable)
-            yield return new TheoremTrials(theorem.Name, TrialsBy([theorem]), theorem.Assumes);
-        if (catoni is not null)
-            yield return new TheoremTrials(CatoniPlan.Name, catoni.Trials, CatoniPlan.Assumes);
+        var alone = _applicable.Select(
+            theorem => new TheoremTrials(theorem.Name, TrialsBy([theorem]), theorem.Assumes));
+        return catoni is null
+            ? alone
+            : alone.Append(new TheoremTrials(CatoniPlan.Name, catoni.Trials, CatoniPlan.Assumes));
     }
 
     static ClaimRefusedException NoFacts() => new(
