@@ -8,11 +8,12 @@ sealed class AssertionFinder
 {
     readonly TestFramework _framework;
     readonly Evaluator _evaluator;
+    readonly Writes _writes;
     readonly TrialCountReader _counts;
 
     public AssertionFinder(TestFramework framework, Evaluator evaluator, Writes writes)
     {
-        (_framework, _evaluator) = (framework, evaluator);
+        (_framework, _evaluator, _writes) = (framework, evaluator, writes);
         _counts = new TrialCountReader(evaluator, writes);
     }
 
@@ -49,7 +50,7 @@ sealed class AssertionFinder
     };
 
     // A `return` or `continue` further up may skip the assertion; then it is red less often than read.
-    static bool OnEveryPath(IOperation assertion, IEnumerable<IOperation> around)
+    bool OnEveryPath(IOperation assertion, IEnumerable<IOperation> around)
     {
         IOperation inner = assertion;
         foreach (IOperation outer in around)
@@ -66,15 +67,14 @@ sealed class AssertionFinder
         return true;
     }
 
-    static bool MayLeave(IOperation statement) => statement.DescendantsAndSelf().Any(part =>
-        part switch
+    bool MayLeave(IOperation statement) => _writes.Jumps.Any(jump =>
+        statement.Syntax.Span.Contains(jump.Syntax.Span) && jump switch
         {
-            IReturnOperation returning => !returning.IsInsideFunction(),
+            IReturnOperation => !jump.IsInsideFunction(),
             IBranchOperation { BranchKind: BranchKind.GoTo } => true,
-            IBranchOperation branch => !branch.Around()
+            _ => !jump.Around()
                 .TakeWhile(outer => statement.Syntax.Span.Contains(outer.Syntax.Span))
                 .Any(outer => outer is ILoopOperation
-                    || (outer is ISwitchOperation && branch.BranchKind == BranchKind.Break)),
-            _ => false,
+                    || (outer is ISwitchOperation && jump is IBranchOperation { BranchKind: BranchKind.Break })),
         });
 }

@@ -18,7 +18,7 @@ sealed class SuiteReader
 
     /// <summary>Whether a method can hold anything to read, told without looking at its operations.</summary>
     public TestFramework? Admit(IMethodSymbol method, SyntaxNode body) =>
-        _tests.FrameworkOf(method) is { } framework && Gate.HasLoop(body) ? framework : null;
+        Gate.HasLoop(body) ? _tests.FrameworkOf(method) : null;
 
     public ImmutableArray<AssertionReading> Read(
         IMethodSymbol method, TestFramework framework, IOperation body, CancellationToken cancellation)

@@ -38,8 +38,24 @@ abstract class TestFramework
 
     protected static bool Has(string text, string word) => text.IndexOf(word, StringComparison.OrdinalIgnoreCase) >= 0;
 
-    protected static bool IsIn(INamedTypeSymbol type, string space) =>
-        type.ContainingNamespace?.ToDisplayString() == space;
+    // Asked of every call of a suite: no name is put together.
+    protected static bool IsIn(INamedTypeSymbol type, string space)
+    {
+        int end = space.Length;
+        for (INamespaceSymbol? at = type.ContainingNamespace; at is { IsGlobalNamespace: false }; at = at.ContainingNamespace)
+        {
+            int start = end - at.Name.Length;
+            if (start < 0 || string.CompareOrdinal(space, start, at.Name, 0, at.Name.Length) != 0)
+                return false;
+            if (start == 0)
+                return at.ContainingNamespace is { IsGlobalNamespace: true };
+            if (space[start - 1] != '.')
+                return false;
+            end = start - 1;
+        }
+
+        return false;
+    }
 
     protected static Requirement Demand(Term condition, IOperation site, Term? meant = null) =>
         new(condition, meant, site, 1, false);

@@ -10,12 +10,16 @@ namespace Assize.Analyzers;
 sealed class Writes
 {
     readonly Dictionary<ISymbol, List<Write>> _writes = new(SymbolEqualityComparer.Default);
+    readonly List<IOperation> _jumps = [];
 
     public Writes(IOperation body)
     {
         foreach (IOperation operation in body.DescendantsAndSelf())
             Add(operation);
     }
+
+    /// <summary>Every `return`, `break`, `continue` and `goto` of the body, those of functions inside it too.</summary>
+    public IReadOnlyList<IOperation> Jumps => _jumps;
 
     /// <summary>Jumps that make source order meaningless.</summary>
     public bool HasGoto { get; private set; }
@@ -55,8 +59,12 @@ sealed class Writes
             case IAddressOfOperation address:
                 AddOpaque(address.Reference, address);
                 break;
-            case IBranchOperation { BranchKind: BranchKind.GoTo }:
-                HasGoto = true;
+            case IBranchOperation branch:
+                _jumps.Add(branch);
+                HasGoto |= branch.BranchKind == BranchKind.GoTo;
+                break;
+            case IReturnOperation:
+                _jumps.Add(operation);
                 break;
         }
     }
