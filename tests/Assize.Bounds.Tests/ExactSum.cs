@@ -21,16 +21,22 @@ sealed class ExactSum
     public int Greatest => _atLeast.Length - 2;
 
     /// <summary>The sign of P(S ≥ total) minus a probability, without rounding.</summary>
-    public int CompareAtLeast(int total, double probability)
+    public int CompareAtLeast(int total, double probability) => CompareOutside(-1, total, probability);
+
+    /// <summary>The sign of P(S ≤ low) + P(S ≥ high) minus a probability, without rounding.</summary>
+    public int CompareOutside(int low, int high, double probability)
     {
+        var ways = Tail(0) - Tail(low + 1) + Tail(high);
         int exponent = 0;
         while (Math.Floor(probability) != probability)
             (probability, exponent) = (probability * 2, exponent + 1);
 
-        return (_atLeast[total] << exponent).CompareTo(new BigInteger(probability) * _atLeast[0]);
+        return (ways << exponent).CompareTo(new BigInteger(probability) * _atLeast[0]);
     }
 
-    public double AtLeast(int total) => Math.Exp(BigInteger.Log(_atLeast[total]) - BigInteger.Log(_atLeast[0]));
+    public double AtLeast(int total) => Math.Exp(BigInteger.Log(Tail(total)) - BigInteger.Log(Tail(0)));
+
+    BigInteger Tail(int total) => total > Greatest ? 0 : _atLeast[Math.Max(0, total)];
 
     static BigInteger[] Plus(BigInteger[] ways, int[] weights)
     {

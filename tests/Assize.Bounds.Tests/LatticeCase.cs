@@ -32,6 +32,13 @@ sealed record LatticeCase(ExactSum Sum, int[] Weights, int Trials, int Total)
     public void AssertCovered(double bound) =>
         Assert.True(Sum.CompareAtLeast(Total, bound) <= 0, $"{this}: {bound:R} is below {Probability:R}");
 
+    /// <summary>The same, for totals as far below the mean too.</summary>
+    public void AssertBothSidesCovered(double bound)
+    {
+        int low = (int)Math.Floor((2 * Trials * Moment - Total * All) / (double)All);
+        Assert.True(Sum.CompareOutside(low, Total, bound) <= 0, $"{this}: {bound:R} is below both tails");
+    }
+
     public override string ToString() => $"weights {string.Join(' ', Weights)}, {Trials} trials, total {Total}";
 
     public static IEnumerable<LatticeCase> Every()

@@ -1,0 +1,155 @@
+using System.Globalization;
+using Assize.Testing;
+
+namespace Assize.Bounds.Tests;
+
+public class HoeffdingVarianceTests
+{
+    // The accuracy its page states.
+    const double Accuracy = 1e-11;
+
+    [Fact]
+    public void It_lies_between_the_exact_tail_and_Bennetts_bound()
+    {
+        int seen = 0;
+        double least = double.MaxValue;
+        foreach (var item in LatticeCase.Every())
+        {
+            double bound = HoeffdingVariance.Tail(item.Trials, item.Variance, item.Bound, item.Margin).Upper;
+            item.AssertCovered(bound);
+            Assert.True(
+                bound <= Bennett.Tail(item.Trials, item.Variance, item.Bound, item.Margin).Upper * (1 + Accuracy), $"{item}");
+            least = Math.Min(least, bound / item.Probability);
+            seen++;
+        }
+
+        Assert.True(seen > 10_000, $"only {seen} cases");
+        Assert.InRange(least, 1, 1 + Accuracy);
+    }
+
+    // For a yes/no draw of rate p, variance p(1 - p) and bound 1 - p give the divergence of p + t from p.
+    [Fact]
+    public void Exponents_agree_with_eighty_digits()
+    {
+        double worst = 0;
+        int seen = 0;
+        foreach (var row in ReferenceTable.Rows("tail_bounds").Where(row => row.Text("kind") == "bernoulli"))
+        {
+            double truth = Math.Max(-690.7755278982137, row.Number("ln_chernoff_kl"));
+            var tail = HoeffdingVariance.Tail(
+                row.Whole("n"), row.Number("variance"), row.Number("max_upward_deviation"), row.Number("t"));
+            double error = Math.Log(tail.Upper) - truth;
+            Assert.True(error is >= -2e-13 and <= Accuracy, $"{row}: {error:E2}");
+            worst = Math.Max(worst, error);
+            seen++;
+        }
+
+        Assert.Equal(116, seen);
+        Assert.True(worst > 1e-13, $"{worst}");
+    }
+
+    [Fact]
+    public void Plans_for_a_rate_take_the_trials_of_Chernoffs_bound_or_fewer()
+    {
+        int seen = 0;
+        foreach (var row in ReferenceTable.Rows("plan_bounds"))
+        {
+            // Radii add up to the gap a little earlier than one exponent's two roots, never by a trial more.
+            long trials = RatePair.Trials(row, HoeffdingVariance.Radius);
+            Assert.InRange(trials, row.Whole("n_all"), row.Whole("n_bennett"));
+            Assert.InRange(trials, row.Whole("n_chernoff_kl") - 1, row.Whole("n_chernoff_kl") + 1);
+            seen++;
+        }
+
+        Assert.Equal(167, seen);
+    }
+
+    // Both sides of yes/no draws of rate 1/2, margin 0.01: the divergence; computed elsewhere.
+    [Theory]
+    [InlineData(1e-2, 26_490)]
+    [InlineData(1e-4, 49_515)]
+    [InlineData(1e-6, 72_539)]
+    [InlineData(1e-9, 107_075)]
+    public void Trials_needed_are_the_first_that_suffice(double risk, long trials)
+    {
+        Assert.Equal(trials, HoeffdingVariance.TrialsNeeded(0.25, 0.5, 0.01, risk / 2));
+        Assert.True(HoeffdingVariance.Tail(trials, 0.25, 0.5, 0.01).Upper <= risk / 2);
+        Assert.True(HoeffdingVariance.Tail(trials - 1, 0.25, 0.5, 0.01).Upper > risk / 2);
+    }
+
+    [Theory]
+    [InlineData(100, 0.25, 0.5, 1e-3)]
+    [InlineData(10_000, 1e-4, 1, 1e-9)]
+    [InlineData(1_000_000, 3, 7, 1e-300)]
+    [InlineData(1_000_000_000, 100, 1, 1e-6)]
+    [InlineData(1_000_000_000, 1e-9, 1, 0.999)]
+    public void The_radius_undoes_the_tail_on_the_safe_side(long trials, double variance, double bound, double risk)
+    {
+        double radius = HoeffdingVariance.Radius(trials, variance, bound, risk);
+
+        Assert.InRange(HoeffdingVariance.Tail(trials, variance, bound, radius).Upper, 0, risk * (1 + Accuracy));
+        Assert.True(HoeffdingVariance.Tail(trials, variance, bound, radius * (1 - 1e-11)).Upper > risk);
+    }
+
+    [Fact]
+    public void At_the_bound_it_is_the_probability_of_the_greatest_values_and_beyond_it_is_none()
+    {
+        Assert.Equal(0.125, HoeffdingVariance.Tail(3, 0.25, 0.5, 0.5).Upper, 1e-12);
+        Assert.Equal(0, HoeffdingVariance.Tail(3, 0.25, 0.5, 0.50000000000001).Upper);
+        Assert.Equal(0.5, HoeffdingVariance.Radius(3, 0.25, 0.5, 0.1));
+        Assert.Equal(1, HoeffdingVariance.TrialsNeeded(0.25, 0.5, 0.6, 1e-9));
+    }
+
+    [Theory]
+    [InlineData(1, 1e-300, 1e-150, 1e-150)]
+    [InlineData(1_000_000_000, 1e300, 1e150, 1e140)]
+    [InlineData(1_000_000_000, 1e300, 1e-150, 1e-150)]
+    [InlineData(1_000_000_000, 1e-300, 1e150, 1e150)]
+    [InlineData(1_000_000_000, 1e-300, 1e150, 1e-160)]
+    [InlineData(7, 1, 1, 0)]
+    [InlineData(7, 1, 1, 5e-324)]
+    public void Extreme_facts_give_a_probability_no_less_than_Bentkus_says(
+        long trials, double variance, double bound, double margin)
+    {
+        double tail = HoeffdingVariance.Tail(trials, variance, bound, margin).Upper;
+
+        Assert.InRange(tail, BentkusVariance.Tail(trials, variance, bound, margin).Upper * (1 - 1e-10), 1);
+    }
+
+    [Fact]
+    public void A_margin_too_small_for_any_machine_has_no_number() =>
+        Assert.Null(HoeffdingVariance.TrialsNeeded(1, 1, 1e-9, 1e-9));
+
+    [Fact]
+    public void Its_page_states_how_far_above_the_exact_tail_it_is()
+    {
+        var text = new System.Text.StringBuilder(
+            "| trials | rate | successes | exact | bound | ratio | Bennett |\n| --: | --: | --: | --: | --: | --: | --: |\n");
+        foreach (var (trials, rate, successes) in new[]
+            { (100, 0.5, 65), (10_000, 0.5, 5_300), (10_000, 0.01, 160), (1_000_000, 0.01, 10_600) })
+        {
+            double exact = BinomialTail.UpperTail(trials, successes, rate).Upper;
+            double margin = successes / (double)trials - rate;
+            double bound = HoeffdingVariance.Tail(trials, rate * (1 - rate), 1 - rate, margin).Upper;
+            double bennett = Bennett.Tail(trials, rate * (1 - rate), 1 - rate, margin).Upper;
+            text.Append(CultureInfo.InvariantCulture,
+                $"| {trials:N0} | {rate} | {successes:N0} | {exact:0.00e+0} | {bound:0.00e+0} | {bound / exact:0.0} | {bennett / exact:0.0} |\n");
+        }
+
+        Repository.MustContain("src/docs/tails/HoeffdingVariance.md", "measured", text.ToString());
+    }
+
+    [Fact]
+    public void Arguments_outside_the_domain_are_refused()
+    {
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Tail(0, 1, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Tail(5, 0, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Tail(5, 1, double.NaN, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Tail(5, 1, 1, double.NaN));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Tail(5, 1, 1, -0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Radius(5, 1, 1, 1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.Radius(5, double.NaN, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.TrialsNeeded(1, 1, 0, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => HoeffdingVariance.TrialsNeeded(1, 1, 0.1, 0));
+    }
+}

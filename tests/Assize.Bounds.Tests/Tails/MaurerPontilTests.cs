@@ -1,0 +1,169 @@
+using System.Globalization;
+using Assize.Testing;
+
+namespace Assize.Bounds.Tests;
+
+public class MaurerPontilTests
+{
+    // The accuracy its page states.
+    const double Accuracy = 1e-11;
+
+    static readonly double[] Risks = [0.9, 0.5, 0.2, 0.05, 0.01, 1e-3];
+
+    [Fact]
+    public void Averages_miss_the_mean_by_more_than_the_margin_no_more_often_than_promised()
+    {
+        int seen = 0, broken = 0;
+        foreach (var draws in ThreePoints.Laws())
+        {
+            foreach (int trials in new[] { 2, 3, 6, 12, 40 })
+            {
+                foreach (double risk in Risks)
+                {
+                    double Radius(double variance) => MaurerPontil.Radius(trials, variance, Range(draws), risk);
+                    double Either(double variance) => MaurerPontil.EitherRadius(trials, variance, Range(draws), risk);
+                    Holds(Chance(draws, trials, (average, variance) => -average > Radius(variance)), risk, draws);
+                    Holds(Chance(draws, trials, (average, variance) => average > Radius(variance)), risk, draws);
+                    Holds(Chance(draws, trials, (average, variance) => Math.Abs(average) > Either(variance)), risk, draws);
+                    broken += Chance(draws, trials, (average, variance) => Math.Abs(average) > 0.2 * Either(variance)) > risk ? 1 : 0;
+                    seen += 3;
+                }
+            }
+        }
+
+        Assert.Equal(9_000, seen);
+
+        // The same loop notices a margin a fifth as wide.
+        Assert.True(broken > 5, $"{broken}");
+    }
+
+    [Fact]
+    public void Deviations_miss_by_more_than_their_margin_no_more_often_than_promised()
+    {
+        int seen = 0, broken = 0;
+        foreach (var draws in ThreePoints.Laws())
+        {
+            foreach (int trials in new[] { 2, 3, 6, 12, 40 })
+            {
+                foreach (double risk in Risks)
+                {
+                    double margin = MaurerPontil.DeviationRadius(trials, Range(draws), risk);
+                    double own = draws.Deviation;
+                    Holds(Chance(draws, trials, (_, variance) => own - Math.Sqrt(variance) > margin), risk, draws);
+                    Holds(Chance(draws, trials, (_, variance) => Math.Sqrt(variance) - own > margin), risk, draws);
+                    broken += Chance(draws, trials, (_, variance) => own - Math.Sqrt(variance) > 0.3 * margin) > risk ? 1 : 0;
+                    seen += 2;
+                }
+            }
+        }
+
+        Assert.Equal(6_000, seen);
+        Assert.True(broken > 5, $"{broken}");
+    }
+
+    static void Holds(double chance, double risk, ThreePoints draws) =>
+        Assert.True(chance <= risk * (1 + 1e-12), $"{draws}: {chance} against {risk}");
+
+    static double Range(ThreePoints draws) => draws.Points.Max() - draws.Points.Min();
+
+    // Over every outcome: the average and the unbiased variance of the values. The law's mean is 0.
+    static double Chance(ThreePoints draws, int trials, Func<double, double, bool> missed)
+    {
+        double sum = 0;
+        for (int i = 0; i <= trials; i++)
+        {
+            for (int j = 0; i + j <= trials; j++)
+            {
+                int[] counts = [i, j, trials - i - j];
+                double average = counts.Zip(draws.Points, (count, point) => count * point).Sum() / trials;
+                double variance = counts.Zip(draws.Points, (count, point) => count * (point - average) * (point - average)).Sum()
+                    / (trials - 1);
+                if (missed(average, variance))
+                    sum += draws.Mass(trials, i, j);
+            }
+        }
+
+        return sum;
+    }
+
+    [Fact]
+    public void Margins_agree_with_eighty_digits()
+    {
+        string misses = ReferenceTable.Misses("bound_radius", Accuracy, 120, row =>
+        {
+            double truth = row.Number("t_empirical_bernstein");
+            double radius = MaurerPontil.Radius(
+                row.Whole("n"), row.Number("variance"), row.Number("range"), row.Number("alpha"));
+            double either = MaurerPontil.EitherRadius(
+                row.Whole("n"), row.Number("variance"), row.Number("range"), 1.5 * row.Number("alpha"));
+            return radius < truth ? 1
+                : Math.Max(ReferenceTable.RelativeError(radius, truth), ReferenceTable.RelativeError(either, truth));
+        });
+
+        Assert.Empty(misses);
+    }
+
+    // Values in [0, 1] of deviation 0.05, margin 0.005 to either side; computed elsewhere.
+    [Theory]
+    [InlineData(1e-2, 5_067)]
+    [InlineData(1e-4, 9_157)]
+    [InlineData(1e-6, 13_247)]
+    [InlineData(1e-9, 19_382)]
+    public void Trials_needed_are_the_first_that_suffice(double risk, long trials)
+    {
+        Assert.Equal(trials, MaurerPontil.EitherTrialsNeeded(0.0025, 1, 0.005, risk));
+        Assert.Equal(trials, MaurerPontil.TrialsNeeded(0.0025, 1, 0.005, risk / 1.5));
+        Assert.True(MaurerPontil.EitherRadius(trials, 0.0025, 1, risk) <= 0.005);
+        Assert.True(MaurerPontil.EitherRadius(trials - 1, 0.0025, 1, risk) > 0.005);
+    }
+
+    [Theory]
+    [InlineData(2, 0, 1e-150, 1e-300)]
+    [InlineData(1_000_000_000, 1e300, 1e150, 1e-300)]
+    [InlineData(1_000_000_000, 0, 1, 0.999)]
+    public void Extreme_arguments_follow_the_formulas(long trials, double variance, double range, double risk)
+    {
+        double odds = Math.Log(2) - Math.Log(risk);
+        double radius = Math.Sqrt(variance) * Math.Sqrt(2 * odds / trials) + 7 * range * odds / (3 * (trials - 1.0));
+        double deviation = range * Math.Sqrt(-2 * Math.Log(risk) / (trials - 1));
+
+        Assert.InRange(MaurerPontil.Radius(trials, variance, range, risk) / radius, 1, 1 + Accuracy);
+        Assert.InRange(MaurerPontil.DeviationRadius(trials, range, risk) / deviation, 1, 1 + Accuracy);
+    }
+
+    [Fact]
+    public void Two_values_are_the_fewest_and_a_tiny_margin_has_no_number()
+    {
+        Assert.Equal(2, MaurerPontil.TrialsNeeded(0, 1, 1e9, 0.5));
+        Assert.Null(MaurerPontil.TrialsNeeded(1, 1, 1e-9, 1e-9));
+    }
+
+    [Fact]
+    public void Its_page_states_how_many_trials_it_takes()
+    {
+        var text = new System.Text.StringBuilder(
+            "| risk | variance measured | variance known (Bernstein) | range alone (Bentkus) |\n| --: | --: | --: | --: |\n");
+        foreach (double risk in new[] { 1e-2, 1e-4, 1e-6, 1e-9 })
+        {
+            text.Append(CultureInfo.InvariantCulture,
+                $"| {risk:0e+0} | {MaurerPontil.EitherTrialsNeeded(0.0025, 1, 0.005, risk):N0} | {Bernstein.TrialsNeeded(0.0025, 0.5, 0.005, risk / 2):N0} | {Bentkus.TrialsNeeded(0.5, 0.005, risk / 2):N0} |\n");
+        }
+
+        Repository.MustContain("src/docs/tails/MaurerPontil.md", "measured", text.ToString());
+    }
+
+    [Fact]
+    public void Arguments_outside_the_domain_are_refused()
+    {
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.Radius(1, 0.1, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.Radius(5, -1e-9, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.Radius(5, double.NaN, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.Radius(5, 0.1, 0, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.EitherRadius(5, 0.1, double.NaN, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.EitherRadius(5, 0.1, 1, 1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.DeviationRadius(1, 1, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.DeviationRadius(5, 1, 0));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.TrialsNeeded(0.1, 1, 0, 0.1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => MaurerPontil.EitherTrialsNeeded(0.1, 1, 0.1, double.NaN));
+    }
+}
