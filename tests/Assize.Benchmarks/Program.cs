@@ -2,7 +2,7 @@ using Assize.Benchmarks;
 
 try
 {
-    return BenchmarkTable.Write(args);
+    return args is ["calibrate", .. var families] ? CalibrationTable.Write(families) : BenchmarkTable.Write(args);
 }
 catch (ArgumentException wrong)
 {

@@ -11,7 +11,7 @@ sealed class AnalyzerCost : Benchmark
     const int Repetitions = 8;
 
     public override string Title =>
-        $"{Tests} test methods, 1 in {StatisticalEvery} statistical; charged by the compiler, less an analyzer that asks for the same and does nothing";
+        $"{Tests} test methods, 1 in {StatisticalEvery} statistical; less an analyzer that asks for the same and does nothing";
 
     public override IEnumerable<Row> Measure()
     {
