@@ -25,6 +25,7 @@ public class EnclosureTests
         Assert.Equal((0, 1), (Enclosure.UpTo(0.25).Lower, Enclosure.UpTo(3).Upper));
         Assert.Equal(1e-300, Enclosure.UpTo(0).Upper);
         Assert.InRange(Enclosure.UpToExponential(2).Upper, Math.Exp(-2) * (1 + 1e-12), Math.Exp(-2) * (1 + 1e-11));
+        Assert.InRange(Enclosure.UpToExponential(690).Upper, Math.Exp(-690), Math.Exp(-690) * (1 + 1e-11));
         Assert.Equal((1, 1, 1e-300), (Enclosure.UpToExponential(0).Upper, Enclosure.UpToExponential(-5).Upper,
             Enclosure.UpToExponential(1e9).Upper));
     }

@@ -1,7 +1,7 @@
 namespace Assize.Bounds.Tests;
 
-/// <summary>A total above the mean of some draws on 0 … Top with whole weights, and the facts a bound may use, each rounded
-/// so that the bound has the harder task.</summary>
+/// <summary>A total above the mean of some draws on 0 … Top with whole weights, and the facts a bound may use, each
+/// rounded so that they stay true.</summary>
 sealed record LatticeCase(ExactSum Sum, int[] Weights, int Trials, int Total)
 {
     const double Up = 1 + 1e-15;
@@ -15,8 +15,9 @@ sealed record LatticeCase(ExactSum Sum, int[] Weights, int Trials, int Total)
 
     public double Mean => Moment / (double)All;
 
-    public double Variance =>
-        (All * Weights.Select((weight, point) => (long)weight * point * point).Sum() - Moment * Moment) / (double)(All * All) * Up;
+    long Squares => Weights.Select((weight, point) => (long)weight * point * point).Sum();
+
+    public double Variance => (All * Squares - Moment * Moment) / (double)(All * All) * Up;
 
     public double Bound => (All * Top - Moment) / (double)All * Up;
 

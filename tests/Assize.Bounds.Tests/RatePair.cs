@@ -1,6 +1,7 @@
 namespace Assize.Bounds.Tests;
 
-/// <summary>A row of plan_bounds: a rate against one or two defects, judged by the radius of a bound on a mean.</summary>
+/// <summary>A row of plan_bounds: a rate against one or two defects, judged by the radius of a bound on a
+/// mean.</summary>
 static class RatePair
 {
     public delegate double Radius(long trials, double variance, double bound, double risk);

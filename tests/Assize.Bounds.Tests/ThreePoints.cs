@@ -5,7 +5,7 @@ sealed record ThreePoints(double[] Points, double[] Masses)
 {
     public double Deviation => Math.Sqrt(Points.Zip(Masses, (point, mass) => mass * point * point).Sum());
 
-    /// <summary>The probability that the values of a function at independent draws add up to something accepted.</summary>
+    /// <summary>The probability that a function's values at independent draws add up to something accepted.</summary>
     public double Probability(int trials, Func<double, double> function, Func<double, bool> accepted)
     {
         double[] values = [.. Points.Select(function)];

@@ -36,14 +36,4 @@ sealed record CatoniPlan(long Trials, double Scale, double Risk, double Deviatio
     /// <summary>From this value of the statistic on a number of trials refutes; the same on either side.</summary>
     public double LimitAt(long trials) =>
         (trials * (Scale * Deviation) * (Scale * Deviation) / 2 - Elementary.Log(Risk) + Slack) * (1 + Rounding);
-
-    /// <summary>ψ(y) = sgn(y)·ln(1 + |y| + y²/2).</summary>
-    public static double Influence(double scaled)
-    {
-        double size = Math.Abs(scaled);
-        double influence = size < 1e100
-            ? Elementary.LogOnePlus(size * (1 + size / 2))
-            : 2 * Elementary.Log(size) - 0.693147180559945309417;
-        return scaled < 0 ? -influence : influence;
-    }
 }

@@ -103,7 +103,7 @@ public sealed class MeanPlan
     /// one.</param>
     /// <returns>ψ(s · deviation), ψ(y) = sgn(y) · ln(1 + |y| + y²/2), for this plan's scale s.</returns>
     /// <exception cref="InvalidOperationException">The average is this plan's statistic.</exception>
-    public double InfluenceOf(double deviation) => CatoniPlan.Influence(ByInfluence().Scale * deviation);
+    public double InfluenceOf(double deviation) => Catoni.Influence(ByInfluence().Scale * deviation);
 
     /// <summary>From here on Catoni's statistic refutes the claim, on either side.</summary>
     /// <param name="trials">Number of trials, in [1, 1e15].</param>

@@ -1,7 +1,7 @@
 namespace Assize.Bounds;
 
-/// <summary>How far the average of independent values of known spread may stray above its mean when none can exceed it by
-/// much.</summary>
+/// <summary>How far the average of independent values of known spread may stray above its mean when none can exceed it
+/// by much.</summary>
 /// <remarks>
 /// <para>Holds for: independent values, each at most <c>bound</c> above its mean, their variances averaging to at most
 /// <c>variance</c>.</para>

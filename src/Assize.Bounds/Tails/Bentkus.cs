@@ -19,8 +19,8 @@ public static class Bentkus
     /// <param name="trials">Number of values, in [1, 1e9].</param>
     /// <param name="total">The total, in [0, trials].</param>
     /// <param name="mean">The average of the values' means, in [0, 1].</param>
-    /// <returns>[0, E(B - u)₊ / (total - u)] for the best u ≥ trials·mean, B binomial of this mean; [0, 1] up to the mean
-    /// of the sum.</returns>
+    /// <returns>[0, E(B - u)₊ / (total - u)] for the best u ≥ trials·mean, B binomial of this mean; [0, 1] up to the
+    /// mean of the sum.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Enclosure UpperTail(long trials, double total, double mean)
     {
@@ -98,7 +98,7 @@ public static class Bentkus
         // An average of more draws is a conditional mean of averages of fewer: by Jensen the formula never rises.
         double guess = -0.9 * Elementary.Log(risk) / Divergence.Bernoulli(Math.Min(1, mean + margin), mean);
         long found = IntegerSearch.First(
-            1, MaximumTrials, (long)Math.Min(guess, MaximumTrials), n => Tail(n, mean, margin).Upper <= risk);
+            1, MaximumTrials, (long)Math.Min(guess, MaximumTrials), trials => Tail(trials, mean, margin).Upper <= risk);
         return found <= MaximumTrials ? found : null;
     }
 

@@ -91,7 +91,10 @@ public static class BentkusVariance
         // An average of more draws is a conditional mean of averages of fewer: by Jensen the formula never rises.
         double guess = -2 * Elementary.Log(risk) * (variance / margin + bound / 3) / margin;
         long found = IntegerSearch.First(
-            1, MaximumTrials, (long)Math.Min(guess, MaximumTrials), n => Tail(n, variance, bound, margin).Upper <= risk);
+            1,
+            MaximumTrials,
+            (long)Math.Min(guess, MaximumTrials),
+            trials => Tail(trials, variance, bound, margin).Upper <= risk);
         return found <= MaximumTrials ? found : null;
     }
 

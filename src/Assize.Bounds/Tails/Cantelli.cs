@@ -70,8 +70,8 @@ public static class Cantelli
         return RateTheorem.First(guess, trials => Tail(trials, variance, margin).Upper <= risk);
     }
 
-    /// <summary>How many values the average needs so that it strays to either side by a margin with no more than a given
-    /// probability.</summary>
+    /// <summary>How many values the average needs so that it strays to either side by a margin with no more than a
+    /// given probability.</summary>
     /// <param name="variance">Bound on the average variance, in [1e-300, 1e300]; squared unit of the values.</param>
     /// <param name="margin">The margin, in [1e-150, 1e150]; unit of the values.</param>
     /// <param name="risk">The probability, in [1e-300, 1).</param>

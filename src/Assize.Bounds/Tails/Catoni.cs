@@ -2,13 +2,13 @@ namespace Assize.Bounds;
 
 /// <summary>A statistic for the mean of unbounded values of known spread that no outlier can sway.</summary>
 /// <remarks>
-/// <para>Holds for: independent values of one mean, each of standard deviation at most <c>deviation</c>; nothing else is
-/// asked of their law.</para>
+/// <para>Holds for: independent values of one mean, each of standard deviation at most <c>deviation</c>; nothing else
+/// is asked of their law.</para>
 /// <para>Guarantee: the statistic passes its limit with no more than the given probability, at every number of
 /// trials.</para>
 /// <para>Accuracy: within 1e-11 of the formulas, rounded to the safe side.</para>
-/// <para>Source: O. Catoni, Ann. Inst. H. Poincaré Probab. Statist. 48 (2012) 1148–1185, (2.1) and Proposition 2.4 (from
-/// memory); every bound here is derived on the page from E exp(±Σψ).</para>
+/// <para>Source: O. Catoni, Ann. Inst. H. Poincaré Probab. Statist. 48 (2012) 1148–1185, (2.1) and Proposition 2.4
+/// (from memory); every bound here is derived on the page from E exp(±Σψ).</para>
 /// </remarks>
 public static class Catoni
 {
@@ -16,12 +16,12 @@ public static class Catoni
 
     /// <summary>The influence of one scaled deviation: it grows like a logarithm, so that one value cannot
     /// decide.</summary>
-    /// <param name="deviation">A deviation from the centre times the scale; any finite number.</param>
-    /// <returns>sign(x)·ln(1 + |x| + x²/2).</returns>
-    /// <exception cref="ArgumentOutOfRangeException">The deviation is infinite or NaN.</exception>
+    /// <param name="deviation">A deviation from the centre times the scale; any number.</param>
+    /// <returns>sign(x)·ln(1 + |x| + x²/2); infinite where the deviation is.</returns>
+    /// <exception cref="ArgumentOutOfRangeException">The deviation is NaN.</exception>
     public static double Influence(double deviation)
     {
-        Check.Finite(deviation, nameof(deviation));
+        Check.Between(deviation, double.NegativeInfinity, double.PositiveInfinity, nameof(deviation));
         double size = Math.Abs(deviation);
         double influence = size < 1e100
             ? Elementary.LogOnePlus(size * (1 + size / 2))
@@ -29,7 +29,8 @@ public static class Catoni
         return deviation < 0 ? -influence : influence;
     }
 
-    /// <summary>The probability that the influences about a point a margin above the mean add up to 0 or more.</summary>
+    /// <summary>The probability that the influences about a point a margin above the mean add up to 0 or
+    /// more.</summary>
     /// <remarks>The point where they add up to 0 is an estimate of the mean: it exceeds the mean by the margin with no
     /// more than this probability, and falls short of it by the margin with no more than this probability.</remarks>
     /// <param name="trials">Number of values, at least 1.</param>
@@ -130,7 +131,8 @@ public static class Catoni
         return trials <= RatePlan.MaximumTrials ? (long)Math.Ceiling(trials) : null;
     }
 
-    /// <summary>The scale at which the number of trials for both errors suffices, judged by <see cref="Limit"/>.</summary>
+    /// <summary>The scale at which the number of trials for both errors suffices, judged by
+    /// <see cref="Limit"/>.</summary>
     /// <param name="deviation">Bound on the standard deviation, in [1e-150, 1e150]; unit of the values.</param>
     /// <param name="gap">The distance between edge and defect, in [1e-150, 1e150]; unit of the values.</param>
     /// <returns>gap/(2·deviation² + gap²), in reciprocal units of the values.</returns>

@@ -7,8 +7,8 @@ namespace Assize.Bounds;
 /// <para>Guarantee: at least the true probability, at every number of trials; a single value of two points reaches
 /// it.</para>
 /// <para>Accuracy: within 1e-11 of the formula, rounded up.</para>
-/// <para>Source: Markov's inequality for the fourth power of the sum, whose mean is nκσ⁴ + 3n(n - 1)σ⁴; common practice,
-/// proved on the page.</para>
+/// <para>Source: Markov's inequality for the fourth power of the sum, whose mean is nκσ⁴ + 3n(n - 1)σ⁴; common
+/// practice, proved on the page.</para>
 /// </remarks>
 public static class FourthMoment
 {
@@ -45,8 +45,8 @@ public static class FourthMoment
         return deviation / Math.Sqrt(trials) * scaled * (1 + Enclosure.Rounding);
     }
 
-    /// <summary>How many values the average needs so that it strays to either side by a margin with no more than a given
-    /// probability.</summary>
+    /// <summary>How many values the average needs so that it strays to either side by a margin with no more than a
+    /// given probability.</summary>
     /// <param name="deviation">Bound on the standard deviation, in [1e-150, 1e150]; unit of the values.</param>
     /// <param name="kurtosis">Bound on E(X - EX)⁴/σ⁴, in [1, 1e150].</param>
     /// <param name="margin">The margin, in [1e-150, 1e150]; unit of the values.</param>

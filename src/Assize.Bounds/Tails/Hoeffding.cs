@@ -12,12 +12,6 @@ namespace Assize.Bounds;
 /// </remarks>
 public static class Hoeffding
 {
-    // Above the error of the exponential and the products after it.
-    const double Rounding = 1e-12;
-
-    // Above the error of the divergence, 2e-15, and of a product.
-    const double ExponentRounding = 1e-14;
-
     /// <summary>The probability that the average of values in [0, 1] reaches a level above its mean.</summary>
     /// <param name="trials">Number of values averaged, at least 1.</param>
     /// <param name="level">The level, in [<paramref name="mean"/>, 1].</param>
@@ -29,7 +23,7 @@ public static class Hoeffding
         Check.AtLeast(trials, 1, nameof(trials));
         Check.Probability(mean, nameof(mean));
         Check.Between(level, mean, 1, nameof(level));
-        return UpTo(trials * Divergence.Bernoulli(level, mean));
+        return Enclosure.UpToExponential(trials * Divergence.Bernoulli(level, mean));
     }
 
     /// <summary>The probability that the average of values in [0, 1] falls to a level below its mean.</summary>
@@ -43,7 +37,7 @@ public static class Hoeffding
         Check.AtLeast(trials, 1, nameof(trials));
         Check.Probability(mean, nameof(mean));
         Check.Between(level, 0, mean, nameof(level));
-        return UpTo(trials * Divergence.Bernoulli(level, mean));
+        return Enclosure.UpToExponential(trials * Divergence.Bernoulli(level, mean));
     }
 
     /// <summary>The probability that the average of values in any range strays from its mean to one side.</summary>
@@ -58,28 +52,28 @@ public static class Hoeffding
         Check.Between(range, double.Epsilon, double.MaxValue, nameof(range));
         Check.Between(margin, 0, double.MaxValue, nameof(margin));
         double share = margin / range;
-        return UpTo(2.0 * trials * share * share);
+        return Enclosure.UpToExponential(2.0 * trials * share * share);
     }
 
     /// <summary>The margin that is exceeded to one side with no more than a given probability.</summary>
     /// <param name="trials">Number of values averaged, at least 1.</param>
     /// <param name="range">Greatest minus least possible value, in (0, ∞); same unit as the values.</param>
-    /// <param name="risk">The probability, in (0, 1).</param>
+    /// <param name="risk">The probability, in [1e-300, 1).</param>
     /// <returns>range · √(ln(1/risk) / (2 · trials)), rounded up.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static double Radius(long trials, double range, double risk)
     {
         Check.AtLeast(trials, 1, nameof(trials));
         Check.Between(range, double.Epsilon, double.MaxValue, nameof(range));
-        Check.Inside(risk, 0, 1, nameof(risk));
-        return range * Math.Sqrt(-Elementary.Log(risk) / (2.0 * trials)) * (1 + Rounding);
+        Check.Risk(risk, nameof(risk));
+        return range * Math.Sqrt(-Elementary.Log(risk) / (2.0 * trials)) * (1 + Enclosure.Rounding);
     }
 
     /// <summary>How many values the average needs so that a margin is exceeded to one side with no more than a given
     /// probability.</summary>
     /// <param name="range">Greatest minus least possible value, in (0, ∞); same unit as the values.</param>
     /// <param name="margin">The distance from the mean, in (0, ∞); same unit as the values.</param>
-    /// <param name="risk">The probability, in (0, 1).</param>
+    /// <param name="risk">The probability, in [1e-300, 1).</param>
     /// <returns>The first number, and every larger one, for which <see cref="Tail"/> is at most the risk; null beyond
     /// 1e15.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
@@ -87,14 +81,11 @@ public static class Hoeffding
     {
         Check.Between(range, double.Epsilon, double.MaxValue, nameof(range));
         Check.Between(margin, double.Epsilon, double.MaxValue, nameof(margin));
-        Check.Inside(risk, 0, 1, nameof(risk));
+        Check.Risk(risk, nameof(risk));
         double share = range / margin;
         double guess = -Elementary.Log(risk) * share * share / 2;
         return RateTheorem.First(guess, trials => Tail(trials, range, margin).Upper <= risk);
     }
-
-    static Enclosure UpTo(double exponent) =>
-        new(0, Math.Min(1, Math.Max(1e-300, Elementary.Exp(-exponent * (1 - ExponentRounding)) * (1 + Rounding))));
 
     sealed class OfRates : RateTheorem
     {

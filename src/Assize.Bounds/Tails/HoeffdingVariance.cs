@@ -15,8 +15,8 @@ public static class HoeffdingVariance
     /// <param name="variance">Bound on the average variance, in [1e-300, 1e300]; squared unit of the values.</param>
     /// <param name="bound">Bound on a value minus its mean, in [1e-150, 1e150]; unit of the values.</param>
     /// <param name="margin">The margin, in [0, ∞); unit of the values.</param>
-    /// <returns>[0, exp(-n·KL((v + bound·margin)/(v + bound²) ‖ v/(v + bound²)))] with v the variance; [0, 0] beyond the
-    /// bound.</returns>
+    /// <returns>[0, exp(-n·KL((v + bound·margin)/(v + bound²) ‖ v/(v + bound²)))] with v the variance; [0, 0] beyond
+    /// the bound.</returns>
     /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
     public static Enclosure Tail(long trials, double variance, double bound, double margin)
     {

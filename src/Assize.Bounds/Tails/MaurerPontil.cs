@@ -1,13 +1,14 @@
 namespace Assize.Bounds;
 
-/// <summary>How far the average of values in a range may stray, measured by the variance of those very values.</summary>
+/// <summary>How far the average of values in a range may stray, measured by the variance of those very
+/// values.</summary>
 /// <remarks>
 /// <para>Holds for: independent values of one law in a known range; the variance need not be known.</para>
 /// <para>Guarantee: at least the true margin, at every number of trials from 2 on.</para>
 /// <para>Accuracy: within 1e-11 of the formulas, rounded up; conservative: about three times the trials of a known
 /// variance.</para>
-/// <para>Source: A. Maurer and M. Pontil, COLT 2009 (arXiv 0907.3740), Theorems 4 and 10, from memory; the two-sided form
-/// shares the variance event.</para>
+/// <para>Source: A. Maurer and M. Pontil, COLT 2009 (arXiv 0907.3740), Theorems 4 and 10, from memory; the two-sided
+/// form shares the variance event.</para>
 /// </remarks>
 public static class MaurerPontil
 {
@@ -59,8 +60,8 @@ public static class MaurerPontil
     public static long? EitherTrialsNeeded(double variance, double range, double margin, double risk) =>
         Needed(variance, range, margin, risk, BothSides);
 
-    /// <summary>The margin by which the law's standard deviation may exceed the values' own, or fall short of it, to one
-    /// side.</summary>
+    /// <summary>The margin by which the law's standard deviation may exceed the values' own, or fall short of it, to
+    /// one side.</summary>
     /// <param name="trials">Number of values, at least 2.</param>
     /// <param name="range">Greatest minus least possible value, in [1e-150, 1e150]; unit of the values.</param>
     /// <param name="risk">The probability that the margin is exceeded, in [1e-300, 1).</param>

@@ -7,8 +7,8 @@ namespace Assize.Bounds;
 /// <para>Guarantee: the variance exceeds the limit with no more than the given probability, at every number of
 /// pairs.</para>
 /// <para>Accuracy: within 1e-11 of the formula, rounded up.</para>
-/// <para>Source: the lower tail of a mean of nonnegative values, from e^-u ≤ 1 - u + u²/2; derived on the page. Two-stage
-/// use: F. J. Hickernell, L. Jiang, Y. Liu, A. B. Owen (arXiv 1208.4318).</para>
+/// <para>Source: the lower tail of a mean of nonnegative values, from e^-u ≤ 1 - u + u²/2; derived on the page.
+/// Two-stage use: F. J. Hickernell, L. Jiang, Y. Liu, A. B. Owen (arXiv 1208.4318).</para>
 /// </remarks>
 public static class PairedVariance
 {
@@ -42,8 +42,8 @@ public static class PairedVariance
 
     /// <summary>What the variance exceeds with no more than a given probability.</summary>
     /// <param name="trials">Number of values, at least 2; of an odd number one is left out.</param>
-    /// <param name="meanSquare">Half the mean of the squared differences of the pairs, in [0, 1e300]; squared unit of the
-    /// values.</param>
+    /// <param name="meanSquare">Half the mean of the squared differences of the pairs, in [0, 1e300]; squared unit of
+    /// the values.</param>
     /// <param name="kurtosis">Bound on E(X - EX)⁴/σ⁴, in [1, 1e150].</param>
     /// <param name="risk">The probability, in [1e-300, 1).</param>
     /// <returns>meanSquare/(1 - <see cref="Radius"/>), rounded up; infinite when the radius is 1 or more.</returns>

@@ -2,6 +2,7 @@
 """Writes bentkus.csv (`range`) or bentkus_variance.csv (`variance`); `check` recomputes the rows up to 1000 trials by another
 route. Needs mpmath. Sums are exact up to 2^-2400 of the mass at the mean; every whole u from the mean on is compared."""
 import csv
+import math
 import sys
 from fractions import Fraction
 from mpmath import mp, mpf, log, log1p, sqrt
@@ -91,10 +92,11 @@ def shown(value):
 
 
 def by_range():
-    print("# ln of the least E(B - u)+/(level - u) over u at the mean or beyond, B binomial, level = n(mean +- margin).")
+    print("# ln of the least E(B - u)+/(level - u) over u at the mean or beyond, B binomial, level = n(mean + margin); and the same")
+    print("# for the failures, from their level n - total on.")
     print(f"# Python {sys.version.split()[0]}, mpmath and whole numbers: python3 generate_bentkus.py range > bentkus.csv")
     print("# Inputs are the doubles nearest to the printed decimals.")
-    print("n,mean,margin,ln_upper,ln_lower")
+    print("n,mean,margin,ln_upper,total,ln_lower")
     for n, means in ((1, (0.5, 0.1, 0.9)), (2, (0.5, 0.01)), (10, (0.5, 0.1, 0.001, 0.99)), (1000, (0.5, 0.3, 0.01, 1e-6, 0.95)),
                      (10**5, (0.5, 0.1, 1e-4)), (10**7, (0.5, 0.01, 1e-7)), (10**9, (0.5, 0.001, 3e-8, 1e-9))):
         for mean in means:
@@ -105,8 +107,9 @@ def by_range():
                 if margin >= 1 - mean:
                     continue
                 upper = first_order(n, p, n * Fraction(margin))
-                lower = first_order(n, q, n * Fraction(margin)) if margin < mean else None
-                print(f"{n},{mean!r},{margin!r},{mp.nstr(upper, 25)},{mp.nstr(lower, 25) if lower is not None else ''}", flush=True)
+                total = math.ceil(n * (p - Fraction(margin)))
+                lower = f"{total},{mp.nstr(first_order(n, q, n * p - total), 25)}" if 0 <= total < n * p else ","
+                print(f"{n},{mean!r},{margin!r},{mp.nstr(upper, 25)},{lower}", flush=True)
 
 
 def by_variance():
@@ -147,6 +150,8 @@ def check():
         if int(row["n"]) <= 10 and float(row["margin"]):
             n, p, margin = int(row["n"]), Fraction(float(row["mean"])), Fraction(float(row["margin"]))
             seen += near(row, on_grid(n, p, n * margin, 1), row["ln_upper"])
+            if row["total"]:
+                seen += near(row, on_grid(n, 1 - p, n * p - int(row["total"]), 1), row["ln_lower"])
     for row in rows("bentkus_variance"):
         if int(row["n"]) <= 10:
             n, v, b, t = int(row["n"]), *(Fraction(float(row[name])) for name in ("variance", "bound", "margin"))

@@ -22,6 +22,21 @@ public class RootBracketTests
         Assert.Equal(0.7, RootBracket.Find(x => x < 0.7 ? -1 : 1, 0, 1, 1e-14).Upper, 1e-13);
     }
 
+    [Theory]
+    [InlineData(0.7, 1)]
+    [InlineData(1, 1)]
+    [InlineData(1e-200, 5)]
+    public void The_point_where_a_falling_function_stops_being_positive_is_rounded_up(double root, double greatest)
+    {
+        double found = RootBracket.Descent(x => Math.Log(root / x), greatest, 1e-14);
+
+        Assert.InRange(found / root, 1, 1 + 1e-13);
+    }
+
+    [Fact]
+    public void A_function_that_is_never_positive_stops_at_once_above_nothing() =>
+        Assert.InRange(RootBracket.Descent(_ => -1, 1, 1e-14), 0, 1e-300);
+
     [Fact]
     public void A_root_at_an_end_is_kept()
     {

@@ -130,14 +130,17 @@ public class CantelliTests
     public void Its_page_states_how_far_above_the_exact_tail_it_is()
     {
         var text = new System.Text.StringBuilder(
-            "| trials | deviations | exponential law, above | bound | either side | bound |\n| --: | --: | --: | --: | --: | --: |\n");
+            "| trials | deviations | exponential law, above | bound | either side | bound |\n");
+        text.Append("| --: | --: | --: | --: | --: | --: |\n");
         foreach (var (trials, spreads) in new[] { (1L, 2.0), (10L, 2.0), (1_000L, 2.0), (1_000L, 6.0) })
         {
             double margin = spreads / Math.Sqrt(trials);
             double above = IncompleteGamma.UpperTail(trials, trials * (1 + margin));
             double both = above + (margin < 1 ? IncompleteGamma.LowerTail(trials, trials * (1 - margin)) : 0);
-            text.Append(CultureInfo.InvariantCulture,
-                $"| {trials:N0} | {spreads} | {above:0.00e+0} | {Cantelli.Tail(trials, 1, margin).Upper:0.00e+0} | {both:0.00e+0} | {Cantelli.EitherTail(trials, 1, margin).Upper:0.00e+0} |\n");
+            double one = Cantelli.Tail(trials, 1, margin).Upper;
+            double either = Cantelli.EitherTail(trials, 1, margin).Upper;
+            text.Append(CultureInfo.InvariantCulture, $"| {trials:N0} | {spreads} | {above:0.00e+0} | {one:0.00e+0} ");
+            text.Append(CultureInfo.InvariantCulture, $"| {both:0.00e+0} | {either:0.00e+0} |\n");
         }
 
         Repository.MustContain("src/docs/tails/Cantelli.md", "measured", text.ToString());

@@ -122,6 +122,7 @@ public class CatoniTests
 
         Assert.True(seen > 12_000);
         Assert.True(Catoni.Influence(1e308) > Catoni.Influence(1e307));
+        Assert.Equal(double.NegativeInfinity, Catoni.Influence(double.NegativeInfinity));
     }
 
     [Theory]
@@ -140,7 +141,8 @@ public class CatoniTests
 
     [Fact]
     public void Too_few_values_have_no_radius() =>
-        Assert.Equal((double.PositiveInfinity, double.PositiveInfinity), (Catoni.Radius(41, 1, 1e-9), Catoni.Radius(1, 1, 0.5)));
+        Assert.Equal(
+            (double.PositiveInfinity, double.PositiveInfinity), (Catoni.Radius(41, 1, 1e-9), Catoni.Radius(1, 1, 0.5)));
 
     [Fact]
     public void A_margin_too_small_for_any_machine_has_no_number()
@@ -153,11 +155,13 @@ public class CatoniTests
     public void Its_page_states_how_many_trials_it_takes()
     {
         var text = new System.Text.StringBuilder(
-            "| risk | Catoni, any law of this deviation | an exponential law's average, exactly | Chebyshev |\n| --: | --: | --: | --: |\n");
+            "| risk | Catoni, any law of this deviation | an exponential law's average, exactly | Chebyshev |\n");
+        text.Append("| --: | --: | --: | --: |\n");
         foreach (var (risk, exact) in new[] { (1e-2, 2_655), (1e-4, 6_071), (1e-6, 9_620), (1e-9, 15_056) })
         {
-            text.Append(CultureInfo.InvariantCulture,
-                $"| {risk:0e+0} | {Catoni.TrialsNeeded(1, 0.05, risk / 2):N0} | {exact:N0} | {400 / risk:N0} |\n");
+            long needed = Catoni.TrialsNeeded(1, 0.05, risk / 2)!.Value;
+            text.Append(CultureInfo.InvariantCulture, $"| {risk:0e+0} | {needed:N0} | {exact:N0} ");
+            text.Append(CultureInfo.InvariantCulture, $"| {400 / risk:N0} |\n");
         }
 
         Repository.MustContain("src/docs/tails/Catoni.md", "measured", text.ToString());
@@ -167,7 +171,6 @@ public class CatoniTests
     public void Arguments_outside_the_domain_are_refused()
     {
         Assert.Throws<ArgumentOutOfRangeException>(() => Catoni.Influence(double.NaN));
-        Assert.Throws<ArgumentOutOfRangeException>(() => Catoni.Influence(double.NegativeInfinity));
         Assert.Throws<ArgumentOutOfRangeException>(() => Catoni.Tail(0, 1, 0.1));
         Assert.Throws<ArgumentOutOfRangeException>(() => Catoni.Tail(5, 0, 0.1));
         Assert.Throws<ArgumentOutOfRangeException>(() => Catoni.Tail(5, 1, double.NaN));

@@ -120,6 +120,7 @@ public class HoeffdingTests
         Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.Tail(10, 0, 0.1));
         Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.Tail(10, 1, double.NaN));
         Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.Radius(10, 1, 1));
+        Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.TrialsNeeded(1, 0.1, 9e-301));
         Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.TrialsNeeded(1, 0, 0.1));
         Assert.Throws<ArgumentOutOfRangeException>(() => Hoeffding.TrialsNeeded(1, 0.1, 0));
     }
