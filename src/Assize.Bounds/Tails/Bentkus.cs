@@ -3,13 +3,13 @@ namespace Assize.Bounds;
 /// <summary>How far the sum of independent values in a range may stray from its mean: the best bound of its kind from
 /// the range alone.</summary>
 /// <remarks>
-/// <para>Holds for: independent values in [0, 1] whose means average to <c>mean</c>; bounded martingale differences
-/// too.</para>
+/// <para>Holds for: independent values in [0, 1] whose means average to <c>mean</c>; values that depend on earlier ones
+/// too, if their conditional means do not.</para>
 /// <para>Guarantee: at least the true probability, at every number of trials.</para>
-/// <para>Accuracy: within 1e-11 of the formula, rounded up; the formula is at most 2.72 times the probability for
-/// yes/no draws.</para>
-/// <para>Source: V. Bentkus, Ann. Probab. 32 (2004) 1650–1673, from memory; the formula is Markov's inequality after
-/// W. Hoeffding's convex domination, J. Amer. Statist. Assoc. 58 (1963) 13–30, (4.3).</para>
+/// <para>Accuracy: within 1e-11 of the formula, rounded up; where it is below ½ the formula is at most 2.72 times the
+/// probability for yes/no draws.</para>
+/// <para>Source: V. Bentkus, Ann. Probab. 32 (2004) 1650–1673; the formula is Markov's inequality after W. Hoeffding,
+/// Ann. Math. Statist. 27 (1956) 713–721, on convex functions of sums (both from memory), proved on the page.</para>
 /// </remarks>
 public static class Bentkus
 {
@@ -145,6 +145,10 @@ public static class Bentkus
         return distance > 0 ? Elementary.Exp(beyond.Mass) * (beyond.Sum0 + beyond.Sum1) / distance : 1;
     }
 
-    static double FromMean(BinomialMoments from, double excess) =>
-        Elementary.Exp(from.Mass) * (from.Sum1 + from.Above * from.Sum0) / excess;
+    // At u = mean; or at the limit itself, where a rounded mean has put it a little below the true one.
+    static double FromMean(BinomialMoments from, double excess)
+    {
+        double above = Math.Max(0, from.Above);
+        return Elementary.Exp(from.Mass) * (from.Sum1 + above * from.Sum0) / (excess - from.Above + above);
+    }
 }

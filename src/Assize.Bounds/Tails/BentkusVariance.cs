@@ -15,6 +15,9 @@ public static class BentkusVariance
 {
     const long MaximumTrials = 1_000_000_000;
 
+    // Rounding must not lift the level above a value that the sum of two-point values can take.
+    const double LevelRounding = 1e-15;
+
     /// <summary>The probability that the average reaches a margin above its mean.</summary>
     /// <param name="trials">Number of values averaged, in [1, 1e9].</param>
     /// <param name="variance">Bound on the average variance, in [1e-300, 1e300]; squared unit of the values.</param>
@@ -35,7 +38,7 @@ public static class BentkusVariance
         // T = (B - n·rate)·step: all in steps from here on.
         double ratio = variance / bound;
         double step = ratio + bound;
-        double excess = trials * (margin / step);
+        double excess = trials * (margin / step) * (1 - LevelRounding);
         double cantelli = 1 / (1 + trials * (margin * margin / variance));
         if (excess == 0 || step > double.MaxValue)
             return Enclosure.UpTo(cantelli);

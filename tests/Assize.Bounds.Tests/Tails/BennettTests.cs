@@ -120,7 +120,7 @@ public class BennettTests
     public void Its_page_states_how_far_above_the_exact_tail_it_is() => Repository.MustContain(
         "src/docs/tails/Bennett.md",
         "measured",
-        YesNoTable.Of(YesNoTable.ByVariance(Bennett.Tail), "Bernstein", YesNoTable.ByVariance(Bernstein.Tail)));
+        YesNoDraws.Table(YesNoDraws.ByVariance(Bennett.Tail), "Bernstein", YesNoDraws.ByVariance(Bernstein.Tail)));
 
     [Fact]
     public void A_margin_too_small_for_any_machine_has_no_number() =>

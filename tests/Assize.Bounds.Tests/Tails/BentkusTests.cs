@@ -124,8 +124,8 @@ public class BentkusTests
                         ? value => exact.CompareAtLeast(successes, value)
                         : value => exact.CompareAtMost(successes, value);
                     Assert.True(compare(bound) <= 0, $"{trials} {rate} {successes}");
-                    Assert.True(
-                        compare(bound / Math.E * (1 - Accuracy)) >= 0 || bound == 1e-300, $"{trials} {rate} {successes}");
+                    double least = bound / Math.E * (1 - Accuracy);
+                    Assert.True(compare(least) >= 0 || bound == 1e-300, $"{trials} {rate} {successes}");
                     seen++;
                 }
             }
@@ -187,10 +187,49 @@ public class BentkusTests
     }
 
     [Fact]
+    public void Yes_no_draws_up_to_a_billion_are_covered()
+    {
+        int seen = 0;
+        foreach (var (trials, rate, successes) in YesNoDraws.ByChance(seed: 53, number: 1_500))
+        {
+            bool above = successes > trials * rate;
+            double bound = above
+                ? Bentkus.UpperTail(trials, successes, rate).Upper
+                : Bentkus.LowerTail(trials, successes, rate).Upper;
+            double exact = above
+                ? BinomialTail.UpperTail(trials, successes, rate).Lower
+                : BinomialTail.LowerTail(trials, successes, rate).Lower;
+            Assert.True(exact <= bound, $"{trials} {rate:R} {successes}: {bound:R} is below {exact:R}");
+            if (bound is < 0.5 and > 1e-300)
+                Assert.True(bound <= Math.E * exact * (1 + Accuracy), $"{trials} {rate:R} {successes}");
+            seen++;
+        }
+
+        Assert.Equal(1_500, seen);
+    }
+
+    // No success in 1e9 trials of rate m·1e-9 has probability e^(n ln(1 - p)), and the bound is that: u = m or 1 gives it.
+    // The mean of the failures, 1e9 - m, cannot be told from 1e9 - 1 in a double.
+    [Fact]
+    public void The_mean_of_nearly_as_many_failures_as_trials_is_not_rounded()
+    {
+        int seen = 0;
+        for (int i = -40; i <= 40; i++)
+        {
+            double rate = (1 + i * 3e-9) * 1e-9;
+            double truth = Math.Exp(1e9 * Elementary.LogOnePlus(-rate));
+            Assert.InRange(Bentkus.LowerTail(1_000_000_000, 0, rate).Upper / truth, 1, 1 + Accuracy);
+            seen++;
+        }
+
+        Assert.Equal(81, seen);
+    }
+
+    [Fact]
     public void Its_page_states_how_far_above_the_exact_tail_it_is() => Repository.MustContain(
         "src/docs/tails/Bentkus.md",
         "measured",
-        YesNoTable.Of(
+        YesNoDraws.Table(
             (trials, rate, successes) => Bentkus.UpperTail(trials, successes, rate).Upper,
             "Hoeffding",
             (trials, rate, successes) => Hoeffding.UpperTail(trials, successes / (double)trials, rate).Upper));

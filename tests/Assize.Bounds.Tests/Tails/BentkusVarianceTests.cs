@@ -88,6 +88,46 @@ public class BentkusVarianceTests
         Assert.True(seen > 1_200, $"only {seen} cases");
     }
 
+    // Rounding must not lift the margin above the greatest sum.
+    [Fact]
+    public void At_the_bound_it_is_the_probability_that_every_value_is_the_greatest()
+    {
+        var random = new Random(61);
+        int seen = 0;
+        for (int i = 0; i < 3_000; i++)
+        {
+            int trials = 1 + random.Next(20);
+            double bound = Math.Pow(10, 4 * random.NextDouble() - 2);
+            double variance = Math.Pow(10, 4 * random.NextDouble() - 3) * bound * bound;
+            double truth = trials * Math.Log(variance / (variance + bound * bound));
+            Assert.InRange(Math.Log(BentkusVariance.Tail(trials, variance, bound, bound).Upper) - truth, -1e-13, Accuracy);
+            seen++;
+        }
+
+        Assert.Equal(3_000, seen);
+    }
+
+    [Fact]
+    public void Yes_no_draws_up_to_a_billion_are_covered()
+    {
+        int seen = 0;
+        foreach (var (trials, rate, successes) in YesNoDraws.ByChance(seed: 59, number: 2_000))
+        {
+            // Failures above their mean are the same draws with most of the mass at the top.
+            bool above = successes > trials * rate;
+            double bound = above ? 1 - rate : rate;
+            double margin = Math.Min(bound, Math.Abs(successes / (double)trials - rate)) * (1 - 1e-15);
+            double tail = BentkusVariance.Tail(trials, rate * (1 - rate), bound, margin).Upper;
+            double exact = above
+                ? BinomialTail.UpperTail(trials, successes, rate).Lower
+                : BinomialTail.LowerTail(trials, successes, rate).Lower;
+            Assert.True(exact <= tail, $"{trials} {rate:R} {successes}: {tail:R} is below {exact:R}");
+            seen++;
+        }
+
+        Assert.Equal(2_000, seen);
+    }
+
     [Fact]
     public void More_trials_or_margin_never_raise_it_and_more_variance_or_bound_never_lower_it()
     {
@@ -156,7 +196,7 @@ public class BentkusVarianceTests
     public void Its_page_states_how_far_above_the_exact_tail_it_is() => Repository.MustContain(
         "src/docs/tails/BentkusVariance.md",
         "measured",
-        YesNoTable.Of(YesNoTable.ByVariance(BentkusVariance.Tail), "Bernstein", YesNoTable.ByVariance(Bernstein.Tail)));
+        YesNoDraws.Table(YesNoDraws.ByVariance(BentkusVariance.Tail), "Bernstein", YesNoDraws.ByVariance(Bernstein.Tail)));
 
     [Fact]
     public void A_margin_that_takes_too_many_trials_has_no_number() =>

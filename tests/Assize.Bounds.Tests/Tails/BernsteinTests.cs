@@ -110,7 +110,7 @@ public class BernsteinTests
     public void Its_page_states_how_far_above_the_exact_tail_it_is() => Repository.MustContain(
         "src/docs/tails/Bernstein.md",
         "measured",
-        YesNoTable.Of(YesNoTable.ByVariance(Bernstein.Tail), "Bentkus", YesNoTable.ByVariance(BentkusVariance.Tail)));
+        YesNoDraws.Table(YesNoDraws.ByVariance(Bernstein.Tail), "Bentkus", YesNoDraws.ByVariance(BentkusVariance.Tail)));
 
     [Fact]
     public void A_margin_too_small_for_any_machine_has_no_number() =>

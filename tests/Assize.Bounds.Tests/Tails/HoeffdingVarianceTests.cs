@@ -123,7 +123,7 @@ public class HoeffdingVarianceTests
     public void Its_page_states_how_far_above_the_exact_tail_it_is() => Repository.MustContain(
         "src/docs/tails/HoeffdingVariance.md",
         "measured",
-        YesNoTable.Of(YesNoTable.ByVariance(HoeffdingVariance.Tail), "Bennett", YesNoTable.ByVariance(Bennett.Tail)));
+        YesNoDraws.Table(YesNoDraws.ByVariance(HoeffdingVariance.Tail), "Bennett", YesNoDraws.ByVariance(Bennett.Tail)));
 
     [Fact]
     public void Arguments_outside_the_domain_are_refused()
