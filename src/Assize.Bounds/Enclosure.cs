@@ -36,4 +36,13 @@ public sealed record Enclosure
     /// <summary>[0, e^-exponent], rounded up; the exponent is known to a relative 9e-15 or better.</summary>
     internal static Enclosure UpToExponential(double exponent) =>
         exponent > 0 ? UpTo(Elementary.Exp(-exponent * (1 - ExponentRounding))) : new(0, 1);
+
+    /// <summary>The two ends moved outwards by a relative amount; below 1e-300 a relative error means nothing.</summary>
+    internal static Enclosure Widened(double lower, double upper, double rounding) => new(
+        lower < 1e-300 ? 0 : Math.Min(1, lower * Math.Max(0, 1 - rounding)),
+        Math.Min(1, Math.Max(1e-300, upper * (1 + rounding))));
+
+    /// <summary>What encloses one less the probability.</summary>
+    internal Enclosure Complement() =>
+        new(Math.Max(0, (1 - Upper) * (1 - Rounding)), Math.Min(1, (1 - Lower) * (1 + Rounding)));
 }

@@ -7,11 +7,18 @@ sealed class ExactSum
 {
     readonly BigInteger[] _atLeast;
 
-    public ExactSum(int[] weights, int trials)
+    public ExactSum(int[] weights, int trials) : this([(weights, trials)])
+    {
+    }
+
+    public ExactSum(params (int[] Weights, int Trials)[] groups)
     {
         BigInteger[] ways = [1];
-        for (int i = 0; i < trials; i++)
-            ways = Plus(ways, weights);
+        foreach (var (weights, trials) in groups)
+        {
+            for (int i = 0; i < trials; i++)
+                ways = Plus(ways, weights);
+        }
 
         _atLeast = new BigInteger[ways.Length + 1];
         for (int total = ways.Length - 1; total >= 0; total--)
@@ -33,6 +40,9 @@ sealed class ExactSum
 
         return (ways << exponent).CompareTo(new BigInteger(probability) * _atLeast[0]);
     }
+
+    /// <summary>The sign of P(S ≤ total) minus a probability, without rounding.</summary>
+    public int CompareAtMost(int total, double probability) => CompareOutside(total, Greatest + 1, probability);
 
     public double AtLeast(int total) => Math.Exp(BigInteger.Log(Tail(total)) - BigInteger.Log(Tail(0)));
 

@@ -48,10 +48,16 @@ sealed class Bernoulli(double rate, double other) : Law, ILattice
     public override double CentralLogMoment(double tilt)
     {
         Check.Finite(tilt, nameof(tilt));
-        return Math.Abs(tilt) > 1
-            ? Math.Max(0, LogMoment(tilt) - tilt * rate)
-            : Elementary.LogOnePlus(
+        if (Math.Abs(tilt) <= 1)
+            return Elementary.LogOnePlus(
                 rate * Elementary.ExpExcess(tilt * other) + other * Elementary.ExpExcess(-tilt * rate));
+        if (Math.Abs(tilt) > 700)
+            return Math.Max(0, LogMoment(tilt) - tilt * rate);
+
+        // From the value that is the likelier one, so that little cancels however near 1 its rate is.
+        return rate <= other
+            ? Elementary.LogOnePlus(rate * Elementary.ExpMinusOne(tilt)) - tilt * rate
+            : Elementary.LogOnePlus(other * Elementary.ExpMinusOne(-tilt)) + tilt * other;
     }
 
     // Both rates are carried: one of them may be too near 1 to be told from it.

@@ -31,7 +31,7 @@ public static class TiltedBerryEsseen
 
         return BinomialPoint.MeanExcess(trials, successes, rate) < 0
             ? Beyond(trials, successes, rate)
-            : Complement(Beyond(trials, successes - 1, rate));
+            : Beyond(trials, successes - 1, rate).Complement();
     }
 
     /// <summary>The probability of so many successes or fewer.</summary>
@@ -48,7 +48,7 @@ public static class TiltedBerryEsseen
 
         return BinomialPoint.MeanExcess(trials, successes, rate) > 0
             ? Beyond(trials, successes, rate)
-            : Complement(Beyond(trials, successes + 1, rate));
+            : Beyond(trials, successes + 1, rate).Complement();
     }
 
     static void Require(long trials, long successes, double rate)
@@ -66,7 +66,7 @@ public static class TiltedBerryEsseen
         double excess = BinomialPoint.MeanExcess(trials, successes, rate);
         double height = Elementary.Exp(-BinomialPoint.Deviance(trials, successes, rate));
         if (successes == 0 || successes == trials)
-            return Enclosing(height, height);
+            return Enclosure.Widened(height, height, Rounding);
 
         double failures = trials - successes;
         double tilt = excess < 0
@@ -74,7 +74,8 @@ public static class TiltedBerryEsseen
             : Elementary.LogOnePlus(excess / (successes * (1 - rate)));
         double share = successes / (double)trials;
         var (mills, distance) = Ratio(tilt, trials, share, failures / trials);
-        return Enclosing(height * Math.Max(0, mills - distance), height * Math.Min(1, mills + distance));
+        return Enclosure.Widened(
+            height * Math.Max(0, mills - distance), height * Math.Min(1, mills + distance), Rounding);
     }
 
     // e^{t²/2} Q(t) and twice the distance of the tilted sum from its normal approximation.
@@ -84,14 +85,6 @@ public static class TiltedBerryEsseen
         double mills = NormalTail.Mills(tilt * deviation * Math.Sqrt(trials)) / RootTwoPi;
         return (mills, 2 * BerryEsseen.Distance((share * share + other * other) / deviation, trials));
     }
-
-    static Enclosure Enclosing(double lower, double upper) => new(
-        lower < 1e-300 ? 0 : Math.Max(0, lower * (1 - Rounding)),
-        Math.Min(1, Math.Max(1e-300, upper * (1 + Rounding))));
-
-    static Enclosure Complement(Enclosure tail) => new(
-        Math.Max(0, (1 - tail.Upper) * (1 - Rounding)),
-        Math.Min(1, (1 - tail.Lower) * (1 + Rounding)));
 
     sealed class OfRates : RateTheorem
     {

@@ -57,6 +57,20 @@ public class BernoulliTests
         Assert.Equal(Math.Exp(-60), law.Variance, 1e-40);
     }
 
+    // Success and failure change places: q = 2^-40 is exact, and so is 1 - q.
+    [Theory]
+    [InlineData(2)]
+    [InlineData(-3)]
+    [InlineData(25)]
+    public void A_rate_next_to_one_costs_the_cumulant_no_digits(double tilt)
+    {
+        double rare = Math.Pow(2, -40);
+        double expected = rare * (Math.Exp(-tilt) - 1 + tilt);
+
+        Assert.Equal(1, Law.Bernoulli(1 - rare).CentralLogMoment(tilt) / expected, 1e-11);
+        Assert.Equal(1, Law.Bernoulli(rare).CentralLogMoment(-tilt) / expected, 1e-11);
+    }
+
     [Fact]
     public void Certain_draws_have_one_value()
     {
