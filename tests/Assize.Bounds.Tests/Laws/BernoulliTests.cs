@@ -57,7 +57,7 @@ public class BernoulliTests
         Assert.Equal(Math.Exp(-60), law.Variance, 1e-40);
     }
 
-    // Success and failure change places: q = 2^-40 is exact, and so is 1 - q.
+    // Success and failure change places: q = 2^-40 is exact, and so is 1 - q; the square left out is 2e-11 of the whole.
     [Theory]
     [InlineData(2)]
     [InlineData(-3)]
@@ -67,8 +67,8 @@ public class BernoulliTests
         double rare = Math.Pow(2, -40);
         double expected = rare * (Math.Exp(-tilt) - 1 + tilt);
 
-        Assert.Equal(1, Law.Bernoulli(1 - rare).CentralLogMoment(tilt) / expected, 1e-11);
-        Assert.Equal(1, Law.Bernoulli(rare).CentralLogMoment(-tilt) / expected, 1e-11);
+        Assert.Equal(1, Law.Bernoulli(1 - rare).CentralLogMoment(tilt) / expected, 1e-10);
+        Assert.Equal(1, Law.Bernoulli(rare).CentralLogMoment(-tilt) / expected, 1e-10);
     }
 
     [Fact]
