@@ -12,7 +12,7 @@ sealed class BandSearch
     const double Rim = 1e-12;
 
     // Keeps an answer within a fraction of a millisecond; what is left over is at most one step of the count too many.
-    const int MostEvaluations = 2000;
+    const int MostEvaluations = 400;
 
     readonly double _low;
     readonly double _high;

@@ -16,6 +16,7 @@ public sealed class RatePlan
     readonly RateSide? _lower;
     readonly RateSide? _upper;
     readonly List<RateSearch> _searches = [];
+    readonly Lazy<long> _firstTrials;
     readonly Lazy<IReadOnlyList<TheoremTrials>> _theorems;
 
     RatePlan(Edges edges, double risk, double confidence, double miss)
@@ -32,7 +33,7 @@ public sealed class RatePlan
             _searches.Add(new RateSearch(_upper, _lower, Miss));
 
         Trials = _searches.Max(search => search.LastFailing()) + 1;
-        FirstTrials = FirstThatWorks();
+        _firstTrials = new(FirstThatWorks);
         Limits = LimitsAt(Trials);
         _theorems = new(() =>
             [.. RateTheorem.All().Select(TrialsOf).OrderBy(theorem => theorem.Trials ?? long.MaxValue)]);
@@ -84,7 +85,7 @@ public sealed class RatePlan
     public long Trials { get; }
 
     /// <summary>The smallest number of trials that meets them at all; some larger ones do not.</summary>
-    public long FirstTrials { get; }
+    public long FirstTrials => _firstTrials.Value;
 
     /// <summary>The counts that uphold the claim at <see cref="Trials"/>.</summary>
     public RateLimits Limits { get; }

@@ -38,7 +38,7 @@ sealed class RateSearch
         Proven++;
         (Floor, _redAnyway) = Foundation(opposite?.Risk ?? 0);
         _certified = CertifiedFrom();
-        _leastRedAnyway = LeastRedAnyway();
+        _leastRedAnyway = LeastRedAnyway(Floor, _certified);
     }
 
     /// <summary>No smaller number of trials works.</summary>
@@ -51,13 +51,19 @@ sealed class RateSearch
     public long LastFailing()
     {
         long trials = _certified - 1;
-        while (trials >= Floor)
+        if (trials < Floor)
+            return Math.Max(0, Floor - 1);
+
+        long limit = _side.Limit(trials);
+        for (long length = 1; trials >= Floor;)
         {
-            long limit = _side.Limit(trials);
-            long start = RunStart(trials, limit);
+            long start = RunStart(trials, limit, length);
             if (LastFailingInRun(start, trials, limit) is { } failing)
                 return failing;
 
+            // One trial back the limit is one less, or else stays while its distance from the trials is one less.
+            length = trials - start + 1;
+            limit -= _limitStays ? 1 : length - 1;
             trials = start - 1;
         }
 
@@ -67,13 +73,19 @@ sealed class RateSearch
     /// <summary>The first number of trials that works, from the given one on.</summary>
     public long NextWorking(long trials)
     {
-        while (trials < _certified)
+        if (trials >= _certified)
+            return trials;
+
+        long limit = _side.Limit(trials);
+        for (long length = 1; trials < _certified;)
         {
-            long limit = _side.Limit(trials);
-            long end = RunEnd(trials, limit);
+            long end = RunEnd(trials, limit, length);
             if (FirstWorkingInRun(trials, end, limit) is { } working)
                 return working;
 
+            // One trial on the limit is one more, or else stays while its distance from the trials is one more.
+            length = end - trials + 1;
+            limit += _limitStays ? 1 : length - 1;
             trials = end + 1;
         }
 
@@ -116,15 +128,14 @@ sealed class RateSearch
     double RedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
 
-    // At this defect the opposite limit turns some verdicts red as well: at least so many, wherever it is looked at
-    // one by one.
-    double LeastRedAnyway()
+    // At this defect the opposite limit turns some verdicts red as well: at least so many, wherever in the block.
+    double LeastRedAnyway(long first, long last)
     {
         if (_opposite is null)
             return 0;
 
-        double level = _opposite.Risk * (1 - _opposite.MostHazard(Floor, _certified)) * (1 - Slack);
-        return level > 0 ? _opposite.SmoothedRed(_certified, level, _side.Defect) * (1 - Slack) : 0;
+        double level = LeastLevel(_opposite, first, last);
+        return level > 0 ? _opposite.SmoothedRed(last, level, _side.Defect) * (1 - Slack) : 0;
     }
 
     // Downwards from Chernoff's number, in blocks that one evaluation settles.
@@ -147,25 +158,33 @@ sealed class RateSearch
     // that level.
     bool Certified(long first, long last)
     {
-        double hazard = _side.MostHazard(first, last);
-        double level = _side.Risk * (1 - hazard) * (1 - Slack);
-        return level > 0 && _side.SmoothedMiss(first, level) <= _miss * (1 - Slack);
+        double level = LeastLevel(_side, first, last);
+        if (!(level > 0))
+            return false;
+
+        double missed = _side.SmoothedMiss(first, level);
+        return missed <= _miss * (1 - Slack)
+            || (Maybe(missed) && missed <= (_miss + LeastRedAnyway(first, last)) * (1 - Slack));
     }
 
-    long RunStart(long trials, long limit)
+    static double LeastLevel(RateSide side, long first, long last) =>
+        side.Risk * (1 - side.MostHazard(first, last)) * (1 - Slack);
+
+    long RunStart(long trials, long limit, long length)
     {
+        long guess = trials - length + 1;
         if (_limitStays)
-            return limit == 0 ? 1 : IntegerSearch.First(1, trials, trials, n => !Allowed(n, limit - 1));
+            return limit == 0 ? 1 : IntegerSearch.First(1, trials, guess, n => !Allowed(n, limit - 1));
 
         long apart = trials - limit;
-        return IntegerSearch.First(Math.Max(1, apart), trials, trials, n => Allowed(n, n - apart));
+        return IntegerSearch.First(Math.Max(1, apart), trials, guess, n => Allowed(n, n - apart));
     }
 
-    long RunEnd(long trials, long limit)
+    long RunEnd(long trials, long limit, long length)
     {
         long apart = trials - limit;
         bool Ended(long n) => _limitStays ? !Allowed(n, limit) : Allowed(n, n - apart - 1);
-        return IntegerSearch.First(trials + 1, Proven, trials + 1, Ended) - 1;
+        return IntegerSearch.First(trials + 1, Proven, trials + length, Ended) - 1;
     }
 
     bool Allowed(long trials, long limit) => RateSide.Within(_side.Beyond(trials, limit), _side.Risk);
