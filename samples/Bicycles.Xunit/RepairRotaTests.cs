@@ -21,4 +21,9 @@ public class RepairRotaTests
     [Fact]
     public void The_first_place_and_the_last_are_equally_likely() =>
         Claim.SameRate(tolerance: 0.02).MustHold(rng => RepairRota.Draw(5, rng)[0] == 2, rng => RepairRota.Draw(5, rng)[^1] == 2);
+
+    [Fact]
+    public void Whoever_is_among_the_first_three_is_first_one_time_in_three() =>
+        Claim.RateWhenItQualifies(1 / 3.0, tolerance: 0.01).MustHold(rng =>
+            Array.IndexOf(RepairRota.Draw(7, rng), 2) is var place and < 3 ? place == 0 : null);
 }

@@ -18,6 +18,9 @@ public sealed record MeanFacts
     /// draws.</summary>
     public double? Proxy { get; private init; }
 
+    /// <summary>The mean of the square of a draw is at most this, and no draw is negative; null when not known.</summary>
+    public double? SecondMoment { get; private init; }
+
     /// <summary>The facts without any.</summary>
     public static MeanFacts None { get; } = new();
 
@@ -49,6 +52,21 @@ public sealed record MeanFacts
         Proxy = Positive(proxy, "proxy"),
         StandardDeviation = Math.Min(StandardDeviation ?? double.MaxValue, proxy),
     };
+
+    /// <summary>Adds that no draw is negative and that their squares are not great on average.</summary>
+    /// <param name="secondMoment">At least the mean of the square of a draw, above 0.</param>
+    /// <returns>These facts and this one, and that the variance is at most as large.</returns>
+    /// <exception cref="ClaimRefusedException">The bound is not above 0 and finite, or is NaN.</exception>
+    public MeanFacts NonNegative(double secondMoment)
+    {
+        double deviation = Math.Sqrt(Positive(secondMoment, "second moment"));
+        return this with
+        {
+            Minimum = Math.Max(Minimum ?? 0, 0),
+            SecondMoment = secondMoment,
+            StandardDeviation = Math.Min(StandardDeviation ?? double.MaxValue, deviation),
+        };
+    }
 
     /// <summary>Greatest minus least possible draw; null when not known.</summary>
     public double? Range => Maximum - Minimum;

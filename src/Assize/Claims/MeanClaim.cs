@@ -36,7 +36,7 @@ public sealed record MeanClaim : Claim<double>
     internal MeanClaim(MeanNumbers numbers, MeanFacts facts)
     {
         (_numbers, Facts) = (numbers, facts);
-        Edges = numbers.In(facts.Minimum is { } lower && facts.Maximum is { } upper ? new Domain(lower, upper) : Domain.Any);
+        Edges = numbers.In(new Domain(facts.Minimum ?? double.NegativeInfinity, facts.Maximum ?? double.PositiveInfinity));
     }
 
     /// <summary>What is known about a draw, whether the code is right or not.</summary>
@@ -53,6 +53,9 @@ public sealed record MeanClaim : Claim<double>
 
     /// <inheritdoc cref="MeanWithoutFacts.DrawsSubGaussian"/>
     public MeanClaim DrawsSubGaussian(double proxy) => Knowing(Facts.SubGaussian(proxy));
+
+    /// <inheritdoc cref="MeanWithoutFacts.DrawsNonNegative"/>
+    public MeanClaim DrawsNonNegative(double secondMoment) => Knowing(Facts.NonNegative(secondMoment));
 
     internal override string Sentence => $"{Wording.Claimed("mean", Edges, _numbers.Tolerance)}, {Wording.Facts(Facts)}";
 

@@ -31,6 +31,12 @@ public readonly record struct MeanWithoutFacts
     /// <exception cref="ClaimRefusedException">The bound is not above 0.</exception>
     public MeanClaim DrawsSubGaussian(double proxy) => With(MeanFacts.None.SubGaussian(proxy));
 
+    /// <summary>No draw is ever negative, and the mean of its square has a bound: waits, sizes, counts.</summary>
+    /// <param name="secondMoment">At least the mean of the square of a draw, above 0; in the square of the target's unit.</param>
+    /// <returns>A claim that can be judged.</returns>
+    /// <exception cref="ClaimRefusedException">The bound is not above 0.</exception>
+    public MeanClaim DrawsNonNegative(double secondMoment) => With(MeanFacts.None.NonNegative(secondMoment));
+
     MeanClaim With(MeanFacts facts) => _numbers.In is null
         ? throw new ClaimRefusedException("A mean is claimed by Claim.Mean, Claim.MeanAtLeast or Claim.MeanAtMost.")
         : new MeanClaim(_numbers, facts);

@@ -74,6 +74,7 @@ sealed class MeanStakes
     {
         { Minimum: { } lower, Maximum: { } upper } => RangeBets.On(members, lower, upper, Prior(upper - lower)),
         { Proxy: { } proxy } => new SubGaussianBets(members, proxy),
+        { SecondMoment: { } square } => new NonNegativeBets(members, square),
         _ => new DeviationBets(members, Facts.StandardDeviation!.Value),
     };
 

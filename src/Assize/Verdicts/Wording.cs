@@ -125,7 +125,9 @@ static class Wording
         var parts = new List<string>();
         if (facts is { Minimum: { } lower, Maximum: { } upper })
             parts.Add($"between {Number(lower)} and {Number(upper)}");
-        if (facts.Proxy is { } proxy)
+        if (facts.SecondMoment is { } square)
+            parts.Add($"of 0 or more and with a mean square up to {Number(square)}");
+        else if (facts.Proxy is { } proxy)
             parts.Add($"sub-Gaussian of proxy {Number(proxy)}");
         else if (facts.StandardDeviation is { } deviation)
             parts.Add($"of standard deviation up to {Number(deviation)}");

@@ -25,6 +25,16 @@ public class MeanClaimTests
     }
 
     [Fact]
+    public void Draws_that_are_never_negative_need_no_upper_end()
+    {
+        var claim = Claim.Mean(1, tolerance: 0.1).DrawsNonNegative(secondMoment: 2.5);
+
+        Assert.Equal(Outcome.Upheld, claim.Judge(Exponential).Outcome);
+        Assert.Equal(Outcome.Refuted, claim.Judge(rng => 0.8 * Exponential(rng)).Outcome);
+        Assert.Contains("trial 1 drew -1, which is not of 0 or more", claim.Judge(_ => -1).ToString(), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public void A_draw_outside_its_range_refutes_at_once_and_names_itself()
     {
         int trial = 0;

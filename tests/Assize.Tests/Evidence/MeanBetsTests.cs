@@ -64,6 +64,33 @@ public class MeanBetsTests
         }
     }
 
+    // Draws of 0 or more on two points, their mean square at most 1, the mean on the wrong side of the anchor or on it.
+    [Fact]
+    public void Bets_on_draws_that_are_never_negative_are_fair_for_every_law_on_two_points()
+    {
+        int cases = 0;
+        foreach (var member in Members(0, 50, 0.3))
+        {
+            foreach (double low in (double[])[0, 0.05, 0.3, 0.6])
+            {
+                foreach (double high in (double[])[0.31, 0.7, 1, 3, 20])
+                {
+                    foreach (double rate in (double[])[0, 0.001, 0.01, 0.1, 0.3, 0.5, 0.9, 1])
+                    {
+                        double mean = low + rate * (high - low);
+                        if (low * low + rate * (high * high - low * low) > 1 || (mean - member.Anchor) * member.Direction > 0)
+                            continue;
+
+                        Assert.True(Mean(new NonNegativeBets([member], 1), rate, low, high) <= 1 + Rounding, $"{member} {low} {high} {rate}");
+                        cases++;
+                    }
+                }
+            }
+        }
+
+        Assert.True(cases > 200, $"{cases} cases");
+    }
+
     // The bets gain when the truth is where they say: a check that cannot fail would be no check.
     [Fact]
     public void Bets_win_where_they_are_right()
@@ -73,6 +100,7 @@ public class MeanBetsTests
         Assert.True(Mean(RangeBets.On([member], 0, 1, 0.25), 0.4, 0, 1) > 1.01);
         Assert.True(Mean(new DeviationBets([member], 1), 0.5, -0.6, 1.4) > 1.005);
         Assert.True(Mean(new SubGaussianBets([member], 1), 0.5, -0.6, 1.4) > 1.005);
+        Assert.True(Mean(new NonNegativeBets([member with { Direction = -1 }], 0.2), 0.5, 0, 0.4) > 1.005);
     }
 
     static int Fair(Func<MeanBets> fresh, double[] history, MeanMember member, double low, double high)

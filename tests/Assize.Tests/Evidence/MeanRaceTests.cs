@@ -46,6 +46,15 @@ public class MeanRaceTests
     public void Sub_gaussian_draws_keep_both_promises(string law) =>
         KeepBoth(Stakes(Edges.Around(Domain.Any, 0, 0.2, 0.4), MeanFacts.None.SubGaussian(1)), Laws[law], 0, 0.2);
 
+    // Exponential of mean 1 has a mean square of 2; at 1.2 and at the defects below it is less than 4.
+    [Fact]
+    public void Draws_that_are_never_negative_keep_both_promises()
+    {
+        var stakes = Stakes(Edges.Around(new Domain(0, double.PositiveInfinity), 1, 0.1, 0.2), MeanFacts.None.NonNegative(4));
+
+        KeepBoth(stakes, (rng, mean) => -mean * Math.Log(1 - rng.NextDouble()), 1, 0.1);
+    }
+
     // Means of an independent simulation of the same specification (20,000 repetitions); two such runs agree within 5 % here.
     [Theory]
     [InlineData("yes or no", 0.5, 256)]
