@@ -15,6 +15,9 @@ public static class Bentkus
 {
     const long MaximumTrials = 1_000_000_000;
 
+    // Every term has the rounding of the odds once more than the last; the sums weigh terms a deviation or two away.
+    const double SumRounding = 2e-16;
+
     /// <summary>The probability that the sum of values in [0, 1] reaches a total above its mean.</summary>
     /// <param name="trials">Number of values, in [1, 1e9].</param>
     /// <param name="total">The total, in [0, trials].</param>
@@ -132,8 +135,7 @@ public static class Bentkus
         if (least <= most)
             ratio = Math.Min(ratio, FromOneBelow(moments(Math.Min(u, most) + 1), excess));
 
-        // The sums add up to eight deviations' worth of rounded terms.
-        return Enclosure.UpTo(ratio * (1 + 2.5e-16 * Math.Sqrt(trials)));
+        return Enclosure.UpTo(ratio * (1 + SumRounding * Math.Sqrt(trials)));
     }
 
     static bool Passes(BinomialMoments beyond, double excess) =>

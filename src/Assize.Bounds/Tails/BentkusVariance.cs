@@ -15,6 +15,9 @@ public static class BentkusVariance
 {
     const long MaximumTrials = 1_000_000_000;
 
+    // Every term has the rounding of the odds once more than the last; the sums weigh terms a deviation or two away.
+    const double SumRounding = 2e-16;
+
     // Rounding must not lift the level above a value that the sum of two-point values can take.
     const double LevelRounding = 1e-15;
 
@@ -49,8 +52,7 @@ public static class BentkusVariance
             ? BinomialMoments.From(trials, limit, rate)
             : BinomialMoments.OfFailures(trials, limit, other);
 
-        // The sums below add up to eight deviations' worth of rounded terms.
-        double rounding = 1 + 2.5e-16 * Math.Sqrt(trials);
+        double rounding = 1 + SumRounding * Math.Sqrt(trials);
         return Enclosure.UpTo(Math.Min(cantelli, Least(Moments, trials, trials * rate, excess) * rounding));
     }
 

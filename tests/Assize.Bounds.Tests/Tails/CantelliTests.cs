@@ -98,6 +98,28 @@ public class CantelliTests
         Assert.True(needed == 1 || Cantelli.Tail(needed - 1, variance, margin).Upper > risk);
     }
 
+    [Fact]
+    public void Its_page_states_how_far_above_the_formula_it_is()
+    {
+        var table = new AccuracyTable("Cantelli", Accuracy);
+        var rows = ReferenceTable.Rows("spread_facts").ToArray();
+        table.Tails("scattered tails to one side in 120 digits", rows.Select(row => (
+            Math.Log(row.Number("cantelli")),
+            Cantelli.Tail(row.Whole("n"), Variance(row), row.Number("margin")))));
+        table.Tails("scattered tails to either side in 120 digits", rows.Select(row => (
+            Math.Log(row.Number("chebyshev")),
+            Cantelli.EitherTail(row.Whole("n"), Variance(row), row.Number("margin")))));
+        table.Margins("scattered margins to one side in 120 digits", rows.Select(row => (
+            row.Number("r_cantelli"),
+            Cantelli.Radius(row.Whole("n"), Variance(row), row.Number("risk")))));
+        table.Margins("scattered margins to either side in 120 digits", rows.Select(row => (
+            row.Number("r_chebyshev"),
+            Cantelli.EitherRadius(row.Whole("n"), Variance(row), row.Number("risk")))));
+        table.MustStand();
+    }
+
+    static double Variance(ReferenceTable.Row row) => row.Number("deviation") * row.Number("deviation");
+
     [Theory]
     [InlineData(1, 1, 0.5, 1, 1.4142135623730951)]
     [InlineData(4, 9, 0.1, 4.5, 4.743416490252569)]

@@ -125,6 +125,23 @@ public class CatoniTests
         Assert.Equal(double.NegativeInfinity, Catoni.Influence(double.NegativeInfinity));
     }
 
+    [Fact]
+    public void Its_page_states_how_far_above_the_formula_it_is()
+    {
+        var table = new AccuracyTable("Catoni", Accuracy);
+        var rows = ReferenceTable.Rows("spread_facts").ToArray();
+        table.Tails("scattered tails in 120 digits", rows.Select(row => (
+            row.Number("ln_catoni"),
+            Catoni.Tail(row.Whole("n"), row.Number("deviation"), row.Number("margin")))));
+
+        // Near n = 2L a rounded logarithm moves the margin by more.
+        var many = rows.Where(row => row.Whole("n") > -8 * Math.Log(row.Number("risk")));
+        table.Margins("scattered margins in 120 digits", many.Select(row => (
+            row.Number("r_catoni"),
+            Catoni.Radius(row.Whole("n"), row.Number("deviation"), row.Number("risk")))));
+        table.MustStand();
+    }
+
     [Theory]
     [InlineData(30, 1, 0.1)]
     [InlineData(1000, 2, 1e-9)]

@@ -95,6 +95,22 @@ public class FourthMomentTests
         Assert.Equal(400, seen);
     }
 
+    [Fact]
+    public void Its_page_states_how_far_above_the_formula_it_is()
+    {
+        var table = new AccuracyTable("FourthMoment", Accuracy);
+        var rows = ReferenceTable.Rows("spread_facts").ToArray();
+        table.Tails("scattered tails in 120 digits", rows.Select(row => (
+            Math.Log(row.Number("fourth")),
+            FourthMoment.EitherTail(
+                row.Whole("n"), row.Number("deviation"), row.Number("kurtosis"), row.Number("margin")))));
+        table.Margins("scattered margins in 120 digits", rows.Select(row => (
+            row.Number("r_fourth"),
+            FourthMoment.EitherRadius(
+                row.Whole("n"), row.Number("deviation"), row.Number("kurtosis"), row.Number("risk")))));
+        table.MustStand();
+    }
+
     [Theory]
     [InlineData(1, 1, 1, 0.5)]
     [InlineData(1000, 3, 9, 1e-6)]

@@ -90,6 +90,23 @@ public class PairedVarianceTests
         Assert.True(worst > 1e-2, $"{worst}");
     }
 
+    [Fact]
+    public void Its_page_states_how_far_above_the_formula_it_is()
+    {
+        var table = new AccuracyTable("PairedVariance", Accuracy);
+        var rows = ReferenceTable.Rows("spread_facts").ToArray();
+        table.Tails("scattered tails in 120 digits", rows.Select(row => (
+            row.Number("ln_paired"),
+            PairedVariance.Tail(
+                row.Whole("n"),
+                row.Number("kurtosis"),
+                Math.Min(1, 30 * row.Number("margin") / row.Number("deviation"))))));
+        table.Margins("scattered shares in 120 digits", rows.Select(row => (
+            row.Number("r_paired"),
+            PairedVariance.Radius(row.Whole("n"), row.Number("kurtosis"), row.Number("risk")))));
+        table.MustStand();
+    }
+
     // Kurtosis 9, risk 1e-9, half of the variance: 1,990 values; computed elsewhere.
     [Theory]
     [InlineData(9, 0.5, 1e-9, 1_990)]
