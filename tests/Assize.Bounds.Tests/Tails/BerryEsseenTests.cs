@@ -52,6 +52,53 @@ public class BerryEsseenTests
         Assert.Equal(920, seen);
     }
 
+    // Two rates in hundredths, each for so many trials, against whole-number convolutions.
+    [Fact]
+    public void Sums_of_draws_of_several_laws_are_held()
+    {
+        int seen = 0;
+        foreach (var (first, second) in new[] { (1, 50), (90, 10), (30, 40), (50, 51), (2, 98) })
+        {
+            foreach (int trials in new[] { 1, 5, 40, 300 })
+            {
+                var exact = new ExactSum(([100 - first, first], trials), ([100 - second, second], trials));
+                var draws = Draws.Of([(Law.Bernoulli(first / 100.0), trials), (Law.Bernoulli(second / 100.0), trials)]);
+                double distance = BerryEsseen.Distance(draws);
+                double moments = trials * (Third(first) + Third(second)), variance = trials * (Spread(first) + Spread(second));
+                Assert.Equal(1, distance / Math.Min(1, 0.5606 * moments / Math.Pow(variance, 1.5)), 1e-9);
+                for (int total = 0; total <= 2 * trials; total += 1 + trials / 30)
+                {
+                    var (upper, lower) = (BerryEsseen.UpperTail(draws, total), BerryEsseen.LowerTail(draws, total));
+                    Assert.True(exact.CompareAtLeast(total, upper.Lower) >= 0, $"{first} {second} {total}: {upper}");
+                    Assert.True(exact.CompareAtLeast(total, upper.Upper) <= 0, $"{first} {second} {total}: {upper}");
+                    Assert.True(exact.CompareAtMost(total, lower.Lower) >= 0, $"{first} {second} {total}: {lower}");
+                    Assert.True(exact.CompareAtMost(total, lower.Upper) <= 0, $"{first} {second} {total}: {lower}");
+                    seen += 2;
+                }
+            }
+        }
+
+        Assert.True(seen > 800, $"only {seen} tails");
+    }
+
+    static double Spread(int hundredths) => hundredths / 100.0 * (1 - hundredths / 100.0);
+
+    static double Third(int hundredths) => Spread(hundredths) * (1 - 2 * Spread(hundredths));
+
+    [Fact]
+    public void Draws_of_one_law_keep_the_better_constant()
+    {
+        var law = Law.Bernoulli(0.3);
+
+        Assert.Equal(BerryEsseen.Distance(law, 500), BerryEsseen.Distance(Draws.Of(law, 500)));
+        var (one, same) = (BerryEsseen.UpperTail(law, 500, 170), BerryEsseen.UpperTail(Draws.Of(law, 500), 170));
+        Assert.Equal(one.Upper, same.Upper, 1e-14);
+        Assert.Equal(one.Lower, same.Lower, 1e-14);
+        Assert.Throws<ArgumentNullException>(() => BerryEsseen.Distance(null!));
+        Assert.Throws<ArgumentException>(() => BerryEsseen.UpperTail(Draws.Of(Law.Bernoulli(1), 5), 3));
+        Assert.Throws<ArgumentOutOfRangeException>(() => BerryEsseen.LowerTail(Draws.Of(law, 5), double.NaN));
+    }
+
     [Fact]
     public void It_proves_a_common_failure_from_below()
     {
