@@ -99,11 +99,15 @@ public static class IncompleteGamma
             return SmallUpper.Log(shape, point);
 
         // (a - 1) ln x and ln Γ(a) are below the last place of x by then.
-        return point > 1e60 ? -point : LogFactor(shape, point) + Elementary.Log(shape * GammaFraction.Of(shape, point));
+        return point > 1e60 ? -point : LogFactor(shape, point) + Elementary.Log(shape * UpperOver(shape, point));
     }
 
     static double LogLowerDirect(double shape, double point) =>
-        LogFactor(shape, point) + Elementary.Log(Series(shape, point));
+        LogFactor(shape, point) + Elementary.Log(
+            shape < GammaIntegral.LeastShape ? Series(shape, point) : shape * GammaIntegral.Lower(shape, point));
+
+    static double UpperOver(double shape, double point) =>
+        shape < GammaIntegral.LeastShape ? GammaFraction.Of(shape, point) : GammaIntegral.Upper(shape, point);
 
     // x^a e^-x / Γ(a + 1).
     static double LogFactor(double shape, double point)
@@ -119,7 +123,7 @@ public static class IncompleteGamma
     // 1965): 100,000 like terms lose 1e-12 otherwise.
     static double Series(double shape, double point)
     {
-        const int cap = 100_000_000;
+        const int cap = 1_000_000;
         double term = 1, sum = 1, lost = 0;
         for (int k = 1; k < cap; k++)
         {
