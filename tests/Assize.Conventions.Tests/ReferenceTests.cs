@@ -9,7 +9,9 @@ public class ReferenceTests
     [Theory]
     [InlineData("Assize.Bounds")]
     [InlineData("Assize", "Assize.Bounds")]
-    [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "System.CommandLine", "Spectre.Console", "Spectre.Console.Ansi")]
+    [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "Assize.Analyzers", "System.CommandLine", "Spectre.Console",
+        "Spectre.Console.Ansi", "Basic.Reference.Assemblies.Net100", "Microsoft.CodeAnalysis", "Microsoft.CodeAnalysis.CSharp",
+        "Microsoft.CodeAnalysis.Workspaces", "Microsoft.CodeAnalysis.Workspaces.MSBuild")]
     [InlineData("Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis", "Microsoft.CodeAnalysis.CSharp")]
     [InlineData("Assize.Analyzers.Fixes", "Assize.Analyzers", "Assize.Bounds", "Microsoft.CodeAnalysis",
         "Microsoft.CodeAnalysis.CSharp", "Microsoft.CodeAnalysis.Workspaces", "Microsoft.CodeAnalysis.CSharp.Workspaces")]

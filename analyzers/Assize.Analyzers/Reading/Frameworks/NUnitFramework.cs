@@ -27,7 +27,8 @@ sealed class NUnitFramework : TestFramework
     {
         if (attribute.AttributeClass is not { } type || !IsIn(type, "NUnit.Framework"))
             return base.RunsOf(attribute);
-        int? count = attribute.ConstructorArguments.Length == 1 ? attribute.ConstructorArguments[0].Value as int?
+        int? count = attribute.ConstructorArguments.Length == 1 && attribute.ConstructorArguments[0].Kind != TypedConstantKind.Array
+            ? attribute.ConstructorArguments[0].Value as int?
             : null;
         return type.Name switch
         {
