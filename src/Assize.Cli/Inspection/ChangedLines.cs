@@ -104,7 +104,7 @@ sealed partial class ChangedLines
         {
             process = Process.Start(start);
         }
-        catch (System.ComponentModel.Win32Exception)
+        catch (Exception exception) when (exception is not OperationCanceledException)
         {
             throw new CouldNotRunException("git was not found. It is needed to tell which lines changed; leave out --since, or install it.");
         }
