@@ -23,6 +23,9 @@ public static class LatticeSum
 
     const int LargestPeriod = 1 << 22;
 
+    // Angles are then within what the sine is accurate for.
+    const double LargestSpan = 2e6;
+
     // What wraps around is made smaller than this share of the sum.
     const double Negligible = 1e-15;
 
@@ -122,9 +125,10 @@ public static class LatticeSum
 
         double height = Elementary.Exp(cumulant + shift);
         double deviation = Math.Sqrt(tilted.Variance) / step;
+        double widest = draws.Groups.Max(group => Span(group.Law)) / step;
         double rounding = Rounding + ExponentRounding * (cumulant - shift)
             + TiltedSum.MeanError(draws, tilt + 1 / (step * Math.Max(1, deviation)));
-        for (int period = PeriodFor(deviation); period <= LargestPeriod; period *= 2)
+        for (int period = PeriodFor(deviation); period <= LargestPeriod && widest <= LargestSpan; period *= 2)
         {
             double wrapped = Wrapped(tilted, period * step / 2 - Math.Abs(excess));
             if (wrapped > Negligible)
@@ -137,7 +141,14 @@ public static class LatticeSum
         }
 
         throw new InvalidOperationException(
-            $"A sum with a standard deviation of {Check.Text(deviation)} steps is too wide to be inverted exactly.");
+            $"A sum with a standard deviation of {Check.Text(deviation)} steps, and draws {Check.Text(widest)} steps wide, "
+            + "is too wide to be inverted exactly.");
+    }
+
+    static double Span(Law law)
+    {
+        double range = law.Maximum - law.Minimum, own = ((ILattice)law).Step ?? 0;
+        return double.IsInfinity(range) ? own : Math.Max(range, own);
     }
 
     static int PeriodFor(double deviation)

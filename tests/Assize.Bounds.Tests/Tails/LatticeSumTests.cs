@@ -160,5 +160,7 @@ public class LatticeSumTests
         Assert.Throws<ArgumentOutOfRangeException>(() => LatticeSum.LowerTail(coin, double.NegativeInfinity));
         Assert.Throws<InvalidOperationException>(
             () => LatticeSum.UpperTail(Draws.Of(Law.Bernoulli(0.5), 1L << 52), 1L << 51));
+        var spread = Draws.Of([(Law.Bernoulli(0.5), 5), (Law.Bernoulli(1e-12).Image(1e8, 0), 1)]);
+        Assert.Throws<InvalidOperationException>(() => LatticeSum.UpperTail(spread, 4));
     }
 }
