@@ -108,7 +108,7 @@ sealed class RateSearch
     // What the opposite limit may refuse at most falls as the floor rises, and the floor rises as that falls.
     (long Floor, double RedAnyway) Foundation(double redAnyway)
     {
-        long floor = FirstPossible((long)(0.8 * Proven), redAnyway);
+        long floor = FirstPossible(Aim((long)(0.8 * Proven), redAnyway), redAnyway);
         while (_opposite is not null)
         {
             redAnyway = _opposite.SmoothedRed(floor, _opposite.Risk, _side.Defect);
@@ -124,6 +124,26 @@ sealed class RateSearch
 
     long FirstPossible(long guess, double redAnyway) => IntegerSearch.First(
         1, Proven, guess, trials => _side.SmoothedMiss(trials, _side.Risk) <= (_miss + redAnyway) * (1 + Slack));
+
+    // The logarithm of the miss is nearly straight in the trials: a few chords come close, and the search does the rest.
+    long Aim(long trials, double redAnyway)
+    {
+        double allowed = Elementary.Log(_miss + redAnyway);
+        double here = Elementary.Log(_side.SmoothedMiss(trials, _side.Risk)) - allowed;
+        long next = Math.Max(1, trials - trials / 16);
+        for (int chord = 0; chord < 4 && next != trials; chord++)
+        {
+            double there = Elementary.Log(_side.SmoothedMiss(next, _side.Risk)) - allowed;
+            double step = there * (next - trials) / (there - here);
+            if (!(Math.Abs(step) < Proven))
+                break;
+
+            (trials, here) = (next, there);
+            next = Math.Max(1, Math.Min(Proven, next - (long)step));
+        }
+
+        return next;
+    }
 
     double RedAnyway(long trials) =>
         _opposite?.TailBeyond(trials, _opposite.Limit(trials), _side.Defect) ?? 0;
