@@ -65,7 +65,9 @@ sealed class ClaimReader
     {
         if (plan.Refusal is not null)
             return new ClaimReading(made.Syntax.GetLocation(), null, null, null, plan.Refusal);
-        if (trialsCall is null || ValueOf(trialsCall) is not { } argument || number(argument) is not { } trials)
+        if (trialsCall is null)
+            return new ClaimReading(made.Syntax.GetLocation(), null, null, plan.Needed, null);
+        if (ValueOf(trialsCall) is not { } argument || number(argument) is not { } trials)
             return null;
         return new ClaimReading(
             argument.Syntax.GetLocation(), LiteralReader.Of(argument), (long)trials, plan.Needed, null);

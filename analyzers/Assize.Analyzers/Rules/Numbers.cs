@@ -31,6 +31,13 @@ static class Numbers
         return Math.Min(1, Math.Max(0, rounded)).ToString("G4", CultureInfo.InvariantCulture);
     }
 
+    /// <summary>A number rounded down to two significant digits.</summary>
+    public static string ShareBelow(double share)
+    {
+        double unit = Math.Pow(10, Math.Floor(Math.Log10(share)) - 1);
+        return (Math.Floor(share / unit) * unit).ToString("G2", CultureInfo.InvariantCulture);
+    }
+
     static string Whole(double runs, Func<double, double> round)
     {
         double whole = Math.Min(double.MaxValue, Math.Max(1, round(runs)));
