@@ -66,7 +66,7 @@ public sealed class InspectPageTests : IDisposable
         Write("CoinTests.cs", Test("400", "180", "220") + "class Broken { void M( { int x = ; } }");
         using var report = await JsonAsync("inspect", _folder, "--json");
 
-        Assert.Equal(["ASZ2001"], Rules(Assert.Single(report.RootElement.GetProperty("assertions").EnumerateArray())));
+        Assert.Equal(["ASZ2001", "ASZ2005"], Rules(Assert.Single(report.RootElement.GetProperty("assertions").EnumerateArray())));
     }
 
     [Fact]
