@@ -37,7 +37,7 @@ public sealed record Enclosure
     internal static Enclosure UpToExponential(double exponent) =>
         exponent > 0 ? UpTo(Elementary.Exp(-exponent * (1 - ExponentRounding))) : new(0, 1);
 
-    /// <summary>The two ends moved outwards by a relative amount; below 1e-300 a relative error means nothing.</summary>
+    /// <summary>The two ends moved outwards by a relative amount; below 1e-300 that means nothing.</summary>
     internal static Enclosure Widened(double lower, double upper, double rounding) => new(
         lower < 1e-300 ? 0 : Math.Min(1, lower * Math.Max(0, 1 - rounding)),
         Math.Min(1, Math.Max(1e-300, upper * (1 + rounding))));

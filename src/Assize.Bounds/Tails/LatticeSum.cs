@@ -51,7 +51,8 @@ public static class LatticeSum
     /// <returns>An enclosure of P(sum ≥ total).</returns>
     /// <exception cref="ArgumentException">The values lie on no common lattice, or have no variance, or the total is
     /// not finite.</exception>
-    /// <exception cref="InvalidOperationException">More than 4,000,000 steps would have to be told apart.</exception>
+    /// <exception cref="InvalidOperationException">More than 4,000,000 steps would have to be told apart, or one draw
+    /// spreads over more than 2,000,000.</exception>
     public static Enclosure UpperTail(Draws draws, double total)
     {
         double step = Required(draws);
@@ -74,7 +75,8 @@ public static class LatticeSum
     /// <returns>An enclosure of P(sum ≤ total).</returns>
     /// <exception cref="ArgumentException">The values lie on no common lattice, or have no variance, or the total is
     /// not finite.</exception>
-    /// <exception cref="InvalidOperationException">More than 4,000,000 steps would have to be told apart.</exception>
+    /// <exception cref="InvalidOperationException">More than 4,000,000 steps would have to be told apart, or one draw
+    /// spreads over more than 2,000,000.</exception>
     public static Enclosure LowerTail(Draws draws, double total)
     {
         Required(draws);
@@ -94,7 +96,8 @@ public static class LatticeSum
         if (draws.Groups.Any(group => group.Law is not ILattice))
             return null;
 
-        double?[] steps = [.. draws.Groups.Where(group => group.Law.Variance > 0).Select(group => ((ILattice)group.Law).Step)];
+        double?[] steps = [.. draws.Groups.Where(group => group.Law.Variance > 0)
+            .Select(group => ((ILattice)group.Law).Step)];
         if (steps.Length == 0 || steps.Any(step => step is null))
             return null;
 
@@ -141,8 +144,8 @@ public static class LatticeSum
         }
 
         throw new InvalidOperationException(
-            $"A sum with a standard deviation of {Check.Text(deviation)} steps, and draws {Check.Text(widest)} steps wide, "
-            + "is too wide to be inverted exactly.");
+            $"A sum with a standard deviation of {Check.Text(deviation)} steps, of draws up to {Check.Text(widest)} steps "
+            + "wide, is too wide to be inverted exactly. TiltedSum encloses it.");
     }
 
     static double Span(Law law)

@@ -84,7 +84,8 @@ public static class PoissonBinomial
 
     static Enclosure Beyond(IReadOnlyList<double> rates, long successes, bool upper)
     {
-        var groups = rates.GroupBy(rate => rate).Select(group => (Law.Bernoulli(group.Key), group.LongCount())).ToArray();
+        var groups = rates.GroupBy(rate => rate)
+            .Select(group => (Law.Bernoulli(group.Key), group.LongCount())).ToArray();
         var draws = Draws.Of(groups);
         if (!(draws.Variance > 0))
             return (upper ? draws.Mean >= successes : draws.Mean <= successes)

@@ -9,7 +9,8 @@ namespace Assize.Bounds;
 /// <para>Accuracy: the ends are within 1e-10 of the truth while it is above 1e-300, for samples of one size, and within
 /// 1e-12 and 2e-15 a value where the product of the sizes is at most 4,000,000; else an upper end only.</para>
 /// <para>Source: B. V. Gnedenko and V. S. Korolyuk (1951) for samples of one size, J. L. Hodges, Ark. Mat. 3 (1958)
-/// 469–486, for the paths (both from memory); P. Massart, Ann. Probab. 18 (1990) 1269–1283, on each sample beyond.</para>
+/// 469–486, for the paths (both from memory); P. Massart, Ann. Probab. 18 (1990) 1269–1283, on each sample
+/// beyond.</para>
 /// </remarks>
 public static class TwoSampleTail
 {

@@ -6,8 +6,8 @@ namespace Assize.Bounds;
 /// <para>Guarantee: the true probability lies inside the enclosure, at every number of trials, at equal cost.</para>
 /// <para>Accuracy: the ends are the values of one formula at neighbouring counts: at three deviations within 11 % of
 /// the truth at 1,000 trials and within 0.4 % at 1,000,000.</para>
-/// <para>Source: A. M. Zubkov and A. A. Serov, Theory Probab. Appl. 57 (2013) 539–544, Theorem 1; the explicit form from
-/// memory, checked against exact sums.</para>
+/// <para>Source: A. M. Zubkov and A. A. Serov, Theory Probab. Appl. 57 (2013) 539–544, Theorem 1; the explicit form
+/// from memory, checked against exact sums.</para>
 /// </remarks>
 public static class ZubkovSerov
 {

@@ -67,9 +67,11 @@ public class KolmogorovTailTests
     [Fact]
     public void Its_page_states_how_near_four_hundred_bits_it_is()
     {
-        var text = new System.Text.StringBuilder("| trials | rows | one-sided error | two-sided error |\n| --- | --: | --: | --: |\n");
+        var text = new System.Text.StringBuilder(
+            "| trials | rows | one-sided error | two-sided error |\n| --- | --: | --: | --: |\n");
         int seen = 0;
-        foreach (var group in ReferenceTable.Rows("kolmogorov_exact").GroupBy(row => row.Whole("n") <= 50 ? "up to 50" : "up to 1,000"))
+        foreach (var group in ReferenceTable.Rows("kolmogorov_exact")
+            .GroupBy(row => row.Whole("n") <= 50 ? "up to 50" : "up to 1,000"))
         {
             double one = group.Max(row => Error(
                 KolmogorovTail.OneSided(row.Whole("n"), row.Number("d")), row.Number("p_dplus_ge_d"), row));

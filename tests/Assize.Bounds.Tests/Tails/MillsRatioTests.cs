@@ -17,7 +17,10 @@ public class MillsRatioTests
         {
             double point = i / 100.0;
             double truth = SpecialFunctions.Erfc(point / Math.Sqrt(2)) / 2;
-            foreach (var tail in new[] { MillsRatio.Tail(point), MillsRatio.Tail(point, 1), MillsRatio.Tail(point, 2 + i % 40) })
+            foreach (var tail in new[]
+                {
+                    MillsRatio.Tail(point), MillsRatio.Tail(point, 1), MillsRatio.Tail(point, 2 + i % 40),
+                })
             {
                 Assert.True(tail.Lower <= truth * (1 + Reference), $"{point}: {truth:R} is below {tail}");
                 Assert.True(tail.Upper >= truth * (1 - Reference), $"{point}: {truth:R} is above {tail}");
@@ -39,7 +42,8 @@ public class MillsRatioTests
             var tail = MillsRatio.Tail(point);
             double density = Math.Exp(-point * point / 2) / Math.Sqrt(2 * Math.PI);
             Assert.InRange(tail.Upper / Math.Min(0.5, density / point), 1, 1 + 4e-12);
-            Assert.InRange(tail.Lower, density * (1 / point - 1 / (point * point * point)) * (1 - 4e-12) - 1e-16, row.Number("phibar"));
+            double below = density * (1 / point - 1 / (point * point * point));
+            Assert.InRange(tail.Lower, below * (1 - 4e-12) - 1e-16, row.Number("phibar"));
             Assert.InRange(row.Number("phibar"), tail.Lower, tail.Upper);
             seen++;
         }

@@ -15,7 +15,8 @@ public class PoissonBinomialTests
         for (int i = 0; i < 300; i++)
         {
             int spread = (i % 3) switch { 0 => 3, 1 => 40, _ => 1024 };
-            int[] parts = [.. Enumerable.Range(0, 1 + i % 40).Select(_ => i % 2 == 0 ? random.Next(spread + 1) : 1024 - random.Next(spread + 1))];
+            int[] parts = [.. Enumerable.Range(0, 1 + i % 40).Select(_ => random.Next(spread + 1))
+                .Select(part => i % 2 == 0 ? part : 1024 - part)];
             double[] rates = [.. parts.Select(part => part / 1024.0)];
             var exact = AtLeast(parts);
             for (int successes = 0; successes <= parts.Length + 1; successes++)
@@ -62,7 +63,8 @@ public class PoissonBinomialTests
     [Fact]
     public void Its_page_states_how_near_eighty_digits_it_is()
     {
-        var text = new System.Text.StringBuilder("| trials | tails | largest relative error | ends apart |\n| --- | --: | --: | --: |\n");
+        var text = new System.Text.StringBuilder(
+            "| trials | tails | largest relative error | ends apart |\n| --- | --: | --: | --: |\n");
         foreach (var group in ReferenceTable.Rows("binomial_tail").Where(row => row.Whole("n") <= 1_000)
             .GroupBy(row => row.Whole("n") <= 100 ? "up to 100" : "up to 1,000"))
         {
@@ -113,10 +115,12 @@ public class PoissonBinomialTests
         double[] many = [.. Enumerable.Range(0, 30_000).Select(i => 0.25 + i / 60_000.0)];
         foreach (long successes in new[] { 9_800L, 10_250 })
         {
-            var (exact, inverted) = (PoissonBinomial.UpperTail(few, successes), PoissonBinomial.UpperTail(more, successes));
+            var exact = PoissonBinomial.UpperTail(few, successes);
+            var inverted = PoissonBinomial.UpperTail(more, successes);
             Assert.Equal(1, inverted.Upper / exact.Upper, 1e-9);
             Assert.True(inverted.Lower <= exact.Upper && exact.Lower <= inverted.Upper);
-            var (below, invertedBelow) = (PoissonBinomial.LowerTail(few, successes), PoissonBinomial.LowerTail(more, successes));
+            var below = PoissonBinomial.LowerTail(few, successes);
+            var invertedBelow = PoissonBinomial.LowerTail(more, successes);
             Assert.True(invertedBelow.Lower <= below.Upper && below.Lower <= invertedBelow.Upper);
         }
 
