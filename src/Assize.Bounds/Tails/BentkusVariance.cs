@@ -6,8 +6,8 @@ namespace Assize.Bounds;
 /// <para>Holds for: independent values, each at most <c>bound</c> above its mean, their variances averaging to at most
 /// <c>variance</c>; for martingale differences too.</para>
 /// <para>Guarantee: at least the true probability, at every number of trials.</para>
-/// <para>Accuracy: within 1e-11 of the formula, rounded up; the formula is at most 3.7 times the probability for
-/// two-point draws.</para>
+/// <para>Accuracy: within 1e-11 of the formula, rounded up, of a margin 1e-15 smaller; the formula is at most 3.7 times
+/// the probability for two-point draws.</para>
 /// <para>Source: V. Bentkus, Ann. Probab. 32 (2004) 1650–1673, Theorem 1.1 (from memory); I. Pinelis, IMS Lecture Notes
 /// 51 (2006) 33–52, abstract.</para>
 /// </remarks>

@@ -1,8 +1,9 @@
 #!/usr/bin/env python3
-"""Writes bentkus.csv (`range`) or bentkus_variance.csv (`variance`); `check` recomputes the rows up to 1000 trials by another
+"""Writes bentkus.csv (`range`), bentkus_variance.csv (`variance`) or bentkus_steps.csv (`steps`); `check` recomputes the rows up to 1000 trials by another
 route. Needs mpmath. Sums are exact up to 2^-2400 of the mass at the mean; every whole u from the mean on is compared."""
 import csv
 import math
+import random
 import sys
 from fractions import Fraction
 from mpmath import mp, mpf, log, log1p, sqrt
@@ -131,6 +132,24 @@ def by_variance():
                     print(f"{n},{variance!r},{bound!r},{margin!r},{mp.nstr(value, 25)}", flush=True)
 
 
+def by_steps():
+    print("# The same two bounds, kind range and kind variance, at margins next to a value of the sum, where they fall by a step.")
+    print(f"# Python {sys.version.split()[0]}, mpmath and whole numbers: python3 generate_bentkus.py steps > bentkus_steps.csv")
+    print("# Inputs are the doubles nearest to the printed decimals. The mean of kind variance is the variance, its bound is 1.")
+    print("kind,n,mean,margin,ln_tail")
+    source = random.Random(73)
+    for row in range(240):
+        n, mean = source.choice((1, 2, 3, 5, 10, 30, 100)), float(f"{10 ** source.uniform(-14, -1):.6e}")
+        nudge = 1 + source.choice((0, 1e-16, -1e-16, 1e-15, -1e-15, 1e-13, -1e-12, 1e-9))
+        kind = ("range", "variance")[row % 2]
+        rate, step = (mean, 1) if row % 2 == 0 else (mean / (mean + 1), 1 + mean)
+        margin = (source.randint(1, min(n, 12)) / n - rate) * step * nudge
+        if 0 < margin < 1 - mean or kind == "variance" and 0 < margin <= 1:
+            facts = n, Fraction(mean), Fraction(margin)
+            value = first_order(n, facts[1], n * facts[2]) if kind == "range" else second_order(n, facts[1], Fraction(1), facts[2])
+            print(f"{kind},{n},{mean!r},{margin!r},{mp.nstr(value, 25)}", flush=True)
+
+
 def rows(name):
     with open(f"{name}.csv", encoding="utf-8") as file:
         yield from csv.DictReader(line for line in file if not line.startswith("#"))
@@ -167,4 +186,4 @@ def near(row, ours, theirs):
 
 
 if __name__ == "__main__":
-    {"check": check, "range": by_range, "variance": by_variance}[sys.argv[1]]()
+    {"check": check, "range": by_range, "variance": by_variance, "steps": by_steps}[sys.argv[1]]()

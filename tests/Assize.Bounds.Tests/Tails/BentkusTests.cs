@@ -173,6 +173,21 @@ public class BentkusTests
     }
 
     [Fact]
+    public void Next_to_a_value_of_the_sum_it_is_not_below_the_formula()
+    {
+        int seen = 0;
+        foreach (var row in ReferenceTable.Rows("bentkus_steps").Where(row => row.Text("kind") == "range"))
+        {
+            double least = Math.Min(0, Math.Max(-690.7755278982137, row.Number("ln_tail"))) - 2e-13;
+            double tail = Bentkus.Tail(row.Whole("n"), row.Number("mean"), row.Number("margin")).Upper;
+            Assert.True(Math.Log(tail) >= least, $"{row}: {tail:R}");
+            seen++;
+        }
+
+        Assert.Equal(96, seen);
+    }
+
+    [Fact]
     public void Yes_no_draws_up_to_a_billion_are_covered()
     {
         int seen = 0;

@@ -102,6 +102,21 @@ public class BentkusVarianceTests
     }
 
     [Fact]
+    public void Next_to_a_value_of_the_sum_it_is_not_below_the_formula()
+    {
+        int seen = 0;
+        foreach (var row in ReferenceTable.Rows("bentkus_steps").Where(row => row.Text("kind") == "variance"))
+        {
+            double least = Math.Min(0, Math.Max(-690.7755278982137, row.Number("ln_tail"))) - 2e-13;
+            double tail = BentkusVariance.Tail(row.Whole("n"), row.Number("mean"), 1, row.Number("margin")).Upper;
+            Assert.True(Math.Log(tail) >= least, $"{row}: {tail:R}");
+            seen++;
+        }
+
+        Assert.Equal(108, seen);
+    }
+
+    [Fact]
     public void Yes_no_draws_up_to_a_billion_are_covered()
     {
         int seen = 0;
