@@ -85,7 +85,7 @@ public sealed class InspectPageTests : IDisposable
     {
         Write(".editorconfig", "root = true\n[*.cs]\nassize.risk_limit = 0.05\n");
         Write("CoinTests.cs", Test("400", "180", "220"));
-        Write("MutedTests.cs", "#pragma warning disable ASZ2001\n" + Test("100", "45", "55"));
+        Write("MutedTests.cs", "#pragma warning disable ASZ2001, ASZ2003\n" + Test("100", "45", "55"));
         var (exit, output, _) = await TestDesk.SayAsync("inspect", _folder, "--json");
 
         using var report = JsonDocument.Parse(output);
