@@ -12,6 +12,10 @@ public class DockPickerTests
         Claim.Rate(share, tolerance: 0.005).MustHold(rng => picker.Pick(rng) == dock);
 
     [Fact]
+    public void All_docks_at_once() =>
+        Claim.Shares(tolerance: 0.01, ("north", 0.5), ("south", 0.3), ("east", 0.2)).MustHold(picker.Pick);
+
+    [Fact]
     public void A_full_dock_is_never_picked()
     {
         var full = new DockPicker(("north", 5), ("south", 0), ("east", 3));

@@ -19,7 +19,7 @@ public sealed class RatePlan
     readonly Lazy<long> _firstTrials;
     readonly Lazy<IReadOnlyList<TheoremTrials>> _theorems;
 
-    RatePlan(Edges edges, double risk, double confidence, double miss)
+    internal RatePlan(Edges edges, double risk, double confidence, double miss)
     {
         (Edges, Risk, Confidence, Miss) = (edges, risk, confidence, miss);
         double share = edges.LowerEdge is not null && edges.UpperEdge is not null ? risk / 2 : risk;

@@ -16,8 +16,13 @@ sealed class Bet
     const double LogTwo = 0.693147180559945309417;
 
     readonly (double LogWeight, double OnSuccess, double OnFailure)[] _terms;
+    readonly double _mostGain;
 
-    Bet((double, double, double)[] terms) => _terms = terms;
+    Bet((double LogWeight, double OnSuccess, double OnFailure)[] terms)
+    {
+        _terms = terms;
+        _mostGain = terms.Max(term => Math.Max(term.OnSuccess, term.OnFailure));
+    }
 
     /// <summary>Bets on rates away from the target by the defect, twice, four times it …, and on the rim of the
     /// domain.</summary>
@@ -80,6 +85,15 @@ sealed class Bet
         // Each coefficient is within 5 units, product and sum add 2; the logarithm of the sum is within 1e-14.
         double error = 8 * Unit * size + 1e-14;
         return new LogWealth(double.IsInfinity(greatest) ? greatest : greatest + LogSum(logs, greatest), error);
+    }
+
+    /// <summary>The fewest further draws that may bring a wealth to a level, at least 1: those the bet gains by, the others
+    /// only lower it. Before that no exact test is needed.</summary>
+    public long StepsTo(double log, LogWealth from)
+    {
+        const double most = long.MaxValue / 4;
+        double steps = (log - from.AtMost) / _mostGain * (1 - 1e-12);
+        return double.IsNegativeInfinity(from.Value) || steps > most ? (long)most : (long)Math.Max(1, steps);
     }
 
     /// <summary>The least number of successes that may have such a wealth, for a bet that gains by them; trials + 1 if
