@@ -32,4 +32,8 @@ public class RetryJitterTests
     [Test]
     public void Waits_spread_over_the_whole_window() =>
         Claim.StandardDeviation(2.31, tolerance: 0.1).DrawsBetween(0, 8).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
+
+    [Test]
+    public void Waits_fill_the_window_evenly() =>
+        Claim.Follows(x => Math.Clamp(x / 8, 0, 1), tolerance: 0.02).MustHold(rng => jitter.Wait(3, rng).TotalSeconds);
 }

@@ -26,4 +26,15 @@ public class RepairRotaTests
     public void Whoever_is_among_the_first_three_is_first_one_time_in_three() =>
         Claim.RateWhenItQualifies(1 / 3.0, tolerance: 0.01).MustHold(rng =>
             Array.IndexOf(RepairRota.Draw(7, rng), 2) is var place and < 3 ? place == 0 : null);
+
+    public void Every_order_of_three_comes_equally_often() =>
+        Claim.EqualOrders(3, tolerance: 0.005).MustHold(rng => RepairRota.Draw(3, rng));
+
+    [Fact]
+    public void The_first_place_and_the_last_are_filled_alike() =>
+        Claim.SameDistribution(tolerance: 0.03).MustHold(rng => RepairRota.Draw(5, rng)[0], rng => RepairRota.Draw(5, rng)[^1]);
+
+    [Fact]
+    public void Every_one_of_64_bicycles_is_first_equally_often() =>
+        Claim.ManyRates(64, target: 1 / 64.0, tolerance: 0.005).MustHold((rng, places) => places[RepairRota.Draw(64, rng)[0]] = true);
 }

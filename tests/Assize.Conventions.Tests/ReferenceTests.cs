@@ -8,7 +8,7 @@ public class ReferenceTests
 {
     [Theory]
     [InlineData("Assize.Bounds")]
-    [InlineData("Assize", "Assize.Bounds")]
+    [InlineData("Assize", "Assize.Bounds", "MathNet.Numerics")]
     [InlineData("Assize.Cli", "Assize", "Assize.Bounds", "Assize.Analyzers", "System.CommandLine", "Spectre.Console",
         "Spectre.Console.Ansi", "Basic.Reference.Assemblies.Net100", "Microsoft.CodeAnalysis", "Microsoft.CodeAnalysis.CSharp",
         "Microsoft.CodeAnalysis.Workspaces", "Microsoft.CodeAnalysis.Workspaces.MSBuild")]

@@ -32,6 +32,10 @@ sealed class RateSides(ManyStakes stakes, long[] counts, long trials)
         return LogSum(logs);
     }
 
+    /// <summary>The logarithm of the average of the evidence against each rate.</summary>
+    public double AgainstAverage() =>
+        LogSum([.. Enumerable.Range(0, counts.Length).Select(AgainstClaim)]) - Elementary.Log(counts.Length);
+
     /// <summary>The least evidence that a rate has no defect below; null when there can be none.</summary>
     public double? AgainstDefectBelow() => Least(bets => bets.DefectBelow);
 

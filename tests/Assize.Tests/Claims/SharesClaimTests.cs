@@ -40,7 +40,6 @@ public class SharesClaimTests
         Calibrated.Keeps(two, loose => loose.Judge(rng => rng.NextDouble() < 0.5 + shift), isRight);
         var docks = Claim.Shares(0.05, ("north", 0.5), ("south", 0.3), ("east", 0.2));
         Calibrated.Keeps(docks, loose => loose.Judge(rng => Pick(rng, 0.5 - shift, 0.3 + shift)), isRight);
-        Calibrated.Keeps(docks, loose => loose.Judge(rng => Pick(rng, 0.5 + shift, 0.3 - shift / 2)), isRight);
         var die = Claim.EqualShares(0.05, 1, 2, 3, 4, 5, 6);
         Calibrated.Keeps(die, loose => loose.Judge(rng => rng.NextDouble() < 6 * shift / 5 ? 6 : rng.Next(1, 7)), isRight);
     }
