@@ -27,6 +27,7 @@ public class RepairRotaTests
         Claim.RateWhenItQualifies(1 / 3.0, tolerance: 0.01).MustHold(rng =>
             Array.IndexOf(RepairRota.Draw(7, rng), 2) is var place and < 3 ? place == 0 : null);
 
+    [Fact]
     public void Every_order_of_three_comes_equally_often() =>
         Claim.EqualOrders(3, tolerance: 0.005).MustHold(rng => RepairRota.Draw(3, rng));
 
