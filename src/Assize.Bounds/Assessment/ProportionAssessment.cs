@@ -2,10 +2,47 @@ namespace Assize.Bounds;
 
 /// <summary>What an existing assertion on a count of successes does: how often it is red on right code and what it
 /// catches.</summary>
-public static class ProportionAssessment
+public sealed class ProportionAssessment : Assessment
 {
-    /// <summary>The theorem behind every answer of this class.</summary>
-    public static string Theorem => BinomialTail.Name;
+    readonly long _trials;
+    readonly long _acceptLow;
+    readonly long _acceptHigh;
+    readonly ProportionBand _shares;
+    readonly double _rate;
+    readonly Lazy<Enclosure> _falseFailure;
+
+    /// <summary>An assertion on a count of successes.</summary>
+    /// <param name="trials">Number of trials, in [1, 2^52].</param>
+    /// <param name="acceptLow">Least number of successes that passes.</param>
+    /// <param name="acceptHigh">Greatest number of successes that passes.</param>
+    /// <param name="shares">The same band as shares, for other numbers of trials.</param>
+    /// <param name="rate">The right rate, in [0, 1].</param>
+    /// <exception cref="ArgumentOutOfRangeException">An argument lies outside its domain, or is NaN.</exception>
+    public ProportionAssessment(long trials, long acceptLow, long acceptHigh, ProportionBand shares, double rate)
+    {
+        Check.AtLeast(trials, 1, nameof(trials));
+        Check.Probability(rate, nameof(rate));
+        (_trials, _acceptLow, _acceptHigh, _rate) = (trials, acceptLow, acceptHigh, rate);
+        _shares = shares ?? throw new ArgumentNullException(nameof(shares));
+        _falseFailure = new(() => Assess(trials, acceptLow, acceptHigh, rate));
+    }
+
+    /// <inheritdoc/>
+    public override string Theorem => BinomialTail.Name;
+
+    /// <inheritdoc/>
+    public override Enclosure FalseFailure => _falseFailure.Value;
+
+    /// <inheritdoc/>
+    public override double? SmallestDefectCaught(double confidence) =>
+        SmallestDefectCaught(_trials, _acceptLow, _acceptHigh, _rate, confidence);
+
+    /// <inheritdoc/>
+    public override long? TrialsNeeded(double risk) => TrialsNeeded(_shares, _rate, risk);
+
+    /// <inheritdoc/>
+    public override double? ToleranceAffordable(double risk) =>
+        _trials <= RatePlan.MaximumTrials ? ToleranceAffordable(_trials, _rate, risk) : null;
 
     /// <summary>How often the assertion is red.</summary>
     /// <param name="trials">Number of trials, in [1, 2^52].</param>

@@ -22,6 +22,9 @@ public abstract partial class Law
 
 sealed class Affine(Law law, double scale, double shift) : Law, ILattice
 {
+    /// <summary>The law behind this one, and how it is stretched and moved.</summary>
+    internal (Law Law, double Scale, double Shift) Parts => (law, scale, shift);
+
     double ILattice.Start => law is ILattice inner ? scale * inner.Start + shift : double.NaN;
 
     double? ILattice.Step => (law as ILattice)?.Step is { } step ? Math.Abs(scale) * step : null;

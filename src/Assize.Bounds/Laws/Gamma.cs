@@ -27,6 +27,8 @@ public abstract partial class Law
 
 sealed class Gamma(double shape, double scale) : Law
 {
+    internal (double Shape, double Scale) Parts => (shape, scale);
+
     public override double Mean => shape * scale;
 
     public override double Variance => shape * scale * scale;

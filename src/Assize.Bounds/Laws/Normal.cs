@@ -17,6 +17,8 @@ public abstract partial class Law
 
 sealed class Normal(double mean, double deviation) : Law
 {
+    internal double Deviation => deviation;
+
     public override double Mean => mean;
 
     public override double Variance => deviation * deviation;

@@ -63,6 +63,22 @@ sealed class Slopes : Law
         ThirdAbsoluteCentralMoment = Integral(offset => Math.Abs(Cube(offset - _centre)), tilt, _centre) / _whole;
     }
 
+    /// <summary>The share of draws up to a point; for laws that are not tilted.</summary>
+    internal double UpTo(double point)
+    {
+        double before = 0, all = 0;
+        for (int i = 0; i + 1 < _ends.Length; i++)
+        {
+            double width = _ends[i + 1] - _ends[i];
+            double part = Math.Max(0, Math.Min(1, (point - _ends[i]) / width));
+            double slope = _heights[i + 1] - _heights[i];
+            before += width * part * (_heights[i] + slope * part / 2);
+            all += width * (_heights[i] + slope / 2);
+        }
+
+        return before / all;
+    }
+
     public override double Mean { get; }
 
     public override double Variance { get; }

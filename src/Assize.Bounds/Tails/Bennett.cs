@@ -82,4 +82,19 @@ public static class Bennett
             ? margin / bound * ((1 + u) * Elementary.LogShortfall(-u / (1 + u)) / u)
             : ((variance / bound + margin) * Elementary.LogOnePlus(u) - margin) / bound;
     }
+
+    sealed class OfMeans : MeanTheorem
+    {
+        public override string Name => "Bennett";
+
+        public override string Assumes => "independent draws in a range, of bounded standard deviation";
+
+        public override bool Applies(MeanFacts facts) => facts is { Range: not null, StandardDeviation: not null };
+
+        public override double Beyond(MeanFacts facts, long trials, double mean, double margin)
+        {
+            double deviation = facts.StandardDeviation!.Value;
+            return !(margin > 0) ? 1 : Tail(trials, deviation * deviation, BoundAbove(facts, mean), margin).Upper;
+        }
+    }
 }

@@ -158,4 +158,27 @@ public static class Bentkus
         double above = Math.Max(0, from.Above);
         return Elementary.Exp(from.Mass) * (from.Sum1 + above * from.Sum0) / (excess - from.Above + above);
     }
+
+    sealed class OfMeans : MeanTheorem
+    {
+        const long MostTrials = 1_000_000_000;
+
+        public override string Name => "Bentkus";
+
+        public override string Assumes => "independent draws in a range";
+
+        public override bool Applies(MeanFacts facts) => facts.Range is not null;
+
+        // Binomials of a greater rate dominate those of a smaller one: the edge is the worst case.
+        public override double Beyond(MeanFacts facts, long trials, double mean, double margin)
+        {
+            double range = facts.Range!.Value;
+            double share = Math.Max(0, (mean - facts.Minimum!.Value) / range);
+            double above = margin / range * (1 - 1e-14);
+            if (trials > MostTrials || !(above > 0))
+                return 1;
+
+            return share + above > 1 ? 0 : Tail(trials, share, above).Upper;
+        }
+    }
 }

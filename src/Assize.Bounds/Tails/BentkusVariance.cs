@@ -140,4 +140,19 @@ public static class BentkusVariance
         double square = from.Sum2 + 2 * start * from.Sum1 + start * start * from.Sum0;
         return Elementary.Exp(from.Mass) * square / distance / distance;
     }
+
+    sealed class OfMeans : MeanTheorem
+    {
+        public override string Name => "Bentkus, from a variance";
+
+        public override string Assumes => "independent draws in a range, of bounded standard deviation";
+
+        public override bool Applies(MeanFacts facts) => facts is { Range: not null, StandardDeviation: not null };
+
+        public override double Beyond(MeanFacts facts, long trials, double mean, double margin)
+        {
+            double deviation = facts.StandardDeviation!.Value;
+            return trials > 1_000_000_000 || !(margin > 0) ? 1 : Tail(trials, deviation * deviation, BoundAbove(facts, mean), margin).Upper;
+        }
+    }
 }

@@ -70,4 +70,19 @@ public static class Bernstein
         Check.Between(variance, 1e-300, 1e300, nameof(variance));
         Check.Between(bound, 1e-150, 1e150, nameof(bound));
     }
+
+    sealed class OfMeans : MeanTheorem
+    {
+        public override string Name => "Bernstein";
+
+        public override string Assumes => "independent draws in a range, of bounded standard deviation";
+
+        public override bool Applies(MeanFacts facts) => facts is { Range: not null, StandardDeviation: not null };
+
+        public override double Beyond(MeanFacts facts, long trials, double mean, double margin)
+        {
+            double deviation = facts.StandardDeviation!.Value;
+            return !(margin > 0) ? 1 : Tail(trials, deviation * deviation, BoundAbove(facts, mean), margin).Upper;
+        }
+    }
 }

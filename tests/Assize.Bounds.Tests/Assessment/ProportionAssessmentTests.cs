@@ -8,7 +8,7 @@ public class ProportionAssessmentTests
         // A rate of .3 over 1,000 passes, accepted from 251 to 349; a face of a die over 1,000 throws, from 147 to 186.
         Assert.Equal(6.337e-4, ProportionAssessment.Assess(1000, 251, 349, 0.3).Upper, 1e-7);
         Assert.Equal(0.0895, ProportionAssessment.Assess(1000, 147, 186, 1 / 6.0).Lower, 5e-5);
-        Assert.Equal("exact binomial", ProportionAssessment.Theorem);
+        Assert.Equal("exact binomial", BinomialTail.Name);
     }
 
     // Exact probabilities of |S - n/2| ≥ d for a fair coin, recomputed in whole numbers.
