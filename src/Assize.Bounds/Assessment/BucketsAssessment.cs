@@ -3,9 +3,8 @@ namespace Assize.Bounds;
 /// <summary>What an assertion on the count in every bucket does, when all counts must lie in one band.</summary>
 /// <remarks>
 /// Red is the union of the buckets' own reds, so at most their sum. Counts of buckets are negatively associated (K.
-/// Joag-Dev and F. Proschan, Ann. Statist. 11 (1983) 286): too many in one and too many in another are no likelier
-/// together
-/// than apart, so red is at least Σp - (Σp)²/2 on either side alone.
+/// Joag-Dev and F. Proschan, Ann. Statist. 11 (1983) 286, from memory): that no bucket has too many has at most the
+/// product of the single probabilities, and likewise that none has too few; so red is at least 1 minus either product.
 /// </remarks>
 public sealed class BucketsAssessment : Assessment
 {
@@ -105,25 +104,21 @@ public sealed class BucketsAssessment : Assessment
         if (high < low)
             return new Enclosure(1, 1);
 
-        double union = 0, single = 0, above = 0, below = 0;
+        double union = 0, single = 0, notAbove = 0, notBelow = 0;
         foreach (var (share, buckets) in _kinds)
         {
             var red = BinomialTail.Outside(trials, low, high, share);
             union += buckets * red.Upper;
             single = Math.Max(single, red.Lower);
-            above += buckets * (high >= trials ? 0 : BinomialTail.Outside(trials, 0, high, share).Lower);
-            below += buckets * (low <= 0 ? 0 : BinomialTail.Outside(trials, low, trials, share).Lower);
+            notAbove += buckets * LogGreen(high >= trials ? 0 : BinomialTail.Outside(trials, 0, high, share).Lower);
+            notBelow += buckets * LogGreen(low <= 0 ? 0 : BinomialTail.Outside(trials, low, trials, share).Lower);
         }
 
-        return new Enclosure(Math.Min(1, Math.Max(single, Math.Max(Union(above), Union(below)))), Math.Min(1, union * (1 + 1e-14)));
+        double lower = Math.Max(single, -Elementary.ExpMinusOne(Math.Min(notAbove, notBelow)) * (1 - 1e-14));
+        return new Enclosure(Math.Min(1, lower), Math.Min(1, union * (1 + 1e-14)));
     }
 
-    // Bonferroni with pairs no likelier than independent ones; it rises only up to a sum of 1.
-    static double Union(double sum)
-    {
-        double counted = Math.Min(1, sum);
-        return (counted - counted * counted / 2) * (1 - 1e-14);
-    }
+    static double LogGreen(double red) => red >= 1 ? double.NegativeInfinity : Elementary.LogOnePlus(-red);
 
     static long Counted(long buckets)
     {
