@@ -7,7 +7,7 @@ public class CommandLineTests
     {
         var pages = CommandLine.Pages().Select(page => page.Words).Order(StringComparer.Ordinal);
 
-        Assert.Equal(["inspect", "plan", "plan rate", "run"], pages);
+        Assert.Equal(["inspect", "plan", "plan rate", "run", "tally"], pages);
     }
 
     [Fact]

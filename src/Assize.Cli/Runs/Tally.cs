@@ -21,6 +21,9 @@ sealed class Tally
     /// <summary>At most this likely does a healthy suite go red in one run: the sum of the risks (union bound), in [0, 1].</summary>
     public double FalseFailure { get; }
 
+    /// <summary>What the risks come to if no claim hangs on another: 1 − Π(1 − risk), without cancellation.</summary>
+    public double IfIndependent => Entries.Aggregate(0.0, (red, entry) => red + (entry.Risk * (1 - red)));
+
     /// <summary>Trials of all claims together.</summary>
     public long Trials { get; }
 
