@@ -3,11 +3,18 @@ namespace Assize.Cli.Tests;
 public class CommandLineTests
 {
     [Fact]
-    public void Every_command_page_is_found_and_can_be_asked_for_help()
+    public async Task Every_command_page_is_found_and_can_be_asked_for_help()
     {
-        var pages = CommandLine.Pages().Select(page => page.Words).Order(StringComparer.Ordinal);
+        string[] pages = [.. CommandLine.Pages().Select(page => page.Words)];
 
-        Assert.Equal(["inspect", "plan", "plan rate", "run", "tally"], pages);
+        Assert.Equal(Testing.Repository.Files("src/Assize.Cli/Commands", "*Page.cs").Count(file => file != "ICommandPage.cs"), pages.Distinct().Count());
+        Assert.Contains("plan rate", pages);
+        foreach (string page in pages)
+        {
+            var (exit, output, _) = await TestDesk.SayAsync([.. page.Split(' '), "--help"]);
+            Assert.Equal(0, exit);
+            Assert.Contains("Usage:", output, StringComparison.Ordinal);
+        }
     }
 
     [Fact]

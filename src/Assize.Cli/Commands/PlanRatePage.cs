@@ -28,9 +28,9 @@ sealed class PlanRatePage : ICommandPage
         {
             var claim = Claimed(line);
             if (line.GetValue(json))
-                desk.Output.WriteLine(RatePlanJson.Write(claim.Plan()));
+                desk.Output.WriteLine(PlanJson.Write(claim.Plan()));
             else
-                RatePlanText.Write(desk.Page(), claim);
+                PlanText.Write(desk.Page(), claim);
             return (int)ExitCode.Kept;
         });
         return command;

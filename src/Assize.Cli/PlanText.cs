@@ -3,9 +3,9 @@ using Spectre.Console;
 namespace Assize.Cli;
 
 /// <summary>A plan as people read it.</summary>
-static class RatePlanText
+static class PlanText
 {
-    public static void Write(IAnsiConsole page, RateClaim claim)
+    public static void Write(IAnsiConsole page, Claim claim)
     {
         var plan = claim.Plan();
         page.MarkupLineInterpolated($"[bold]Claim: {claim}[/]");
@@ -19,13 +19,21 @@ static class RatePlanText
     static Grid Ways(Plan plan)
     {
         var grid = new Grid().AddColumn(new GridColumn().NoWrap().PadRight(3)).AddColumn();
-        grid.AddRow("Sequential", $"about {Trials(plan.Expected!.AtTarget)} trials when the rate is at its target,");
-        grid.AddRow("", $"{Trials(plan.Expected!.AtTolerance)} at the edge of the tolerance, {Trials(plan.Expected!.AtDefect)} at the defect,");
-        grid.AddRow("", $"never more than {Numbers.Text(plan.TrialCap)}");
+        string[] sequential = plan.Expected is { } expected
+            ?
+            [
+                $"about {Trials(expected.AtTarget)} trials when the rate is at its target,",
+                $"{Trials(expected.AtTolerance)} at the edge of the tolerance, {Trials(expected.AtDefect)} at the defect,",
+                $"never more than {Numbers.Text(plan.TrialCap)}",
+            ]
+            : [$"as few trials as the draws allow, never more than {Numbers.Text(plan.TrialCap)}"];
+        for (int i = 0; i < sequential.Length; i++)
+            grid.AddRow(i == 0 ? "Sequential" : "", sequential[i]);
         grid.AddRow("", "");
         grid.AddRow("Fixed", $"{Numbers.Text(plan.FixedTrials)} trials: {Region(plan)}");
-        grid.AddRow("", $"false failure at most {Numbers.AtMost(plan.Limits!.FalseFailure.Upper)}, "
-            + $"missed defect at most {Numbers.AtMost(plan.Limits!.MissedDefect.Upper)}");
+        if (plan.Limits is { } limits)
+            grid.AddRow("", $"false failure at most {Numbers.AtMost(limits.FalseFailure.Upper)}, "
+                + $"missed defect at most {Numbers.AtMost(limits.MissedDefect.Upper)}");
         if (plan.FirstTrials < plan.FixedTrials)
             grid.AddRow("", $"({Numbers.Text(plan.FirstTrials)} is the first number that works; from {Numbers.Text(plan.FixedTrials)} on, every number does)");
         return grid;
@@ -33,7 +41,8 @@ static class RatePlanText
 
     static string Region(Plan plan)
     {
-        var limits = plan.Limits!;
+        if (plan.Limits is not { } limits)
+            return $"by {plan.Theorem}";
         if (limits.AcceptLow <= 0)
             return $"upheld by {Numbers.Text(limits.AcceptHigh)} successes or fewer";
         return limits.AcceptHigh >= limits.Trials
