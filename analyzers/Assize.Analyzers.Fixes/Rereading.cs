@@ -1,6 +1,5 @@
 using System.Collections.Immutable;
 using Microsoft.CodeAnalysis;
-using Microsoft.CodeAnalysis.CSharp;
 using Microsoft.CodeAnalysis.CSharp.Syntax;
 using Microsoft.CodeAnalysis.Operations;
 
@@ -31,8 +30,8 @@ static class Rereading
     // Raising a loop's bound alone would ask for another rate: that is another test, not this one with more trials.
     static bool IsSameQuestion(Reading old, Reading now) => (old, now) switch
     {
-        (AssertionReading a, AssertionReading b) => Math.Abs(a.Rate.Value - b.Rate.Value) < 1e-9
-            && IsSame(a.Shares.Low, b.Shares.Low) && IsSame(a.Shares.High, b.Shares.High),
+        (AssertionReading a, AssertionReading b) => a.Statistic == b.Statistic && IsSame(a.Target, b.Target)
+            && IsSame(a.Meant.Low, b.Meant.Low) && IsSame(a.Meant.High, b.Meant.High),
         (ClaimReading a, ClaimReading b) => a.Needed == b.Needed,
         _ => false,
     };
@@ -46,26 +45,16 @@ static class Rereading
     {
         if (await document.GetSemanticModelAsync(cancellation).ConfigureAwait(false) is not { } model)
             return null;
-        SyntaxNode root = await model.SyntaxTree.GetRootAsync(cancellation).ConfigureAwait(false);
         var readings = new List<Reading>();
         if (SuiteReader.For(model.Compilation) is { } suite)
-            readings.AddRange(
-                root.DescendantNodes().OfType<MethodDeclarationSyntax>().SelectMany(
-                test => Of(test, suite, model, cancellation)));
+            readings.AddRange(suite.Read(model, cancellation));
+        SyntaxNode root = await model.SyntaxTree.GetRootAsync(cancellation).ConfigureAwait(false);
         if (ClaimReader.For(model.Compilation) is { } claims)
             readings.AddRange(
                 root.DescendantNodes().OfType<InvocationExpressionSyntax>().SelectMany(
                 call => Of(call, claims, model, cancellation)));
         return readings;
     }
-
-    static ImmutableArray<AssertionReading> Of(
-        MethodDeclarationSyntax test, SuiteReader suite, SemanticModel model, CancellationToken cancellation) =>
-        model.GetDeclaredSymbol(test, cancellation) is { } method
-        && model.GetOperation(test, cancellation) is IMethodBodyOperation { BlockBody: { } body }
-        && suite.Admit(method, body.Syntax) is { } framework
-            ? suite.Read(method, framework, body, cancellation)
-            : [];
 
     static ImmutableArray<ClaimReading> Of(
         InvocationExpressionSyntax call, ClaimReader claims, SemanticModel model, CancellationToken cancellation) =>

@@ -71,8 +71,8 @@ public class MiniatureTests(ITestOutputHelper output)
 
     static bool Agrees(Dictionary<string, string> row, AssertionReading reading) =>
         reading.Trials == Number(row["trials"])
-        && reading.AcceptLow == Number(row["accepted_low"])
-        && reading.AcceptHigh == Number(row["accepted_high"])
+        && reading.Accepted.Low == Number(row["accepted_low"])
+        && reading.Accepted.High == Number(row["accepted_high"])
         && Holds(row, reading)
         && AgreesOnTrials(row["trials_needed_1e-6"], reading)
         && AgreesOnDefect(row, reading);
@@ -94,8 +94,8 @@ public class MiniatureTests(ITestOutputHelper output)
     // The table speaks of whole runs; where both directions are as near, either sign is right.
     static bool AgreesOnDefect(Dictionary<string, string> row, AssertionReading reading) =>
         reading.Runs != Runs.Once
-        || (reading.RateCaught(0.999) is { } rate
-            && Math.Abs(Math.Abs(rate - reading.Rate.Value) - Math.Abs(
+        || (reading.DefectCaught(0.999) is { } defect
+            && Math.Abs(Math.Abs(defect) - Math.Abs(
                 Number(row["smallest_defect_caught_99.9"]))) < 1e-5);
 
     static IEnumerable<AssertionReading> ReadAll() => Workbench.Readings(Compilation());

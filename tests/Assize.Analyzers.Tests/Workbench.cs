@@ -2,9 +2,7 @@ using System.Collections.Concurrent;
 using System.Collections.Immutable;
 using Microsoft.CodeAnalysis;
 using Microsoft.CodeAnalysis.CSharp;
-using Microsoft.CodeAnalysis.CSharp.Syntax;
 using Microsoft.CodeAnalysis.Diagnostics;
-using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers.Tests;
 
@@ -74,18 +72,8 @@ static class Workbench
             yield break;
         foreach (SyntaxTree tree in compilation.SyntaxTrees)
         {
-            SemanticModel model = compilation.GetSemanticModel(tree);
-            foreach (var declaration in tree.GetRoot().DescendantNodes().OfType<MethodDeclarationSyntax>())
-            {
-                if (model.GetDeclaredSymbol(declaration) is { } method
-                    && model.GetOperation(declaration) is IMethodBodyOperation { BlockBody: { } body }
-                    && suite.Admit(method, body.Syntax) is { } framework)
-                {
-                    foreach (AssertionReading reading in suite.Read(
-                        method, framework, body, TestContext.Current.CancellationToken))
-                        yield return reading;
-                }
-            }
+            foreach (var reading in suite.Read(compilation.GetSemanticModel(tree), TestContext.Current.CancellationToken))
+                yield return reading;
         }
     }
 

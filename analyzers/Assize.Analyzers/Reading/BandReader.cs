@@ -16,7 +16,7 @@ static class BandReader
     // A meant edge this near 0 or 1, relatively, is the rim: the author bounded one side.
     const double Rim = 1e-9;
 
-    public static Band? Read(Requirement requirement)
+    public static CountBand? Read(Requirement requirement)
     {
         if (EstimatorReader.Proportion(requirement.Condition) is not { } estimate)
             return null;
@@ -38,7 +38,7 @@ static class BandReader
         Interval meant = MeantBy(requirement, condition, count) ?? interval;
         double? centre = CentreOf(meant, trials);
         double tolerance = centre is null ? 0 : (meant.High!.Value - meant.Low!.Value) / 2 / trials;
-        return new Band(count, first, last, Shares(interval, trials), centre, tolerance);
+        return new CountBand(count, first, last, Shares(interval, trials), centre, tolerance);
     }
 
     static Interval? MeantBy(Requirement requirement, Term condition, Sum count) =>

@@ -23,7 +23,7 @@ sealed class LawReader
     /// The rate of a band's counter; null when its draws are not surely random, independent and alike, or no rate is
     /// known.
     /// </summary>
-    public Rate? Read(Band band)
+    public Rate? Read(CountBand band)
     {
         Term condition = ((If)band.Count.Each).Condition;
         var draws = condition.Parts().OfType<Draw>().Distinct().ToList();
@@ -31,12 +31,12 @@ sealed class LawReader
         if (draws.Count == 0 || !draws.TrueForAll(draw => _draws.IsOnePerPass(draw.Code, passes)))
             return null;
         if (draws.Count == 1 && Exact(condition, draws[0]) is { } exact)
-            return IsPlausible(exact, band) ? new Rate(exact, true) : null;
-        return band.Centre is { } centre ? new Rate(centre, false) : null;
+            return IsPlausible(exact, band) ? new Rate(exact, Basis.Law) : null;
+        return band.Centre is { } centre ? new Rate(centre, Basis.Target) : null;
     }
 
     // A law outside the band would mean a test that is always red: rather something was misread.
-    static bool IsPlausible(double rate, Band band) =>
+    static bool IsPlausible(double rate, CountBand band) =>
         rate is > 0 and < 1 && rate * band.Count.Passes >= band.Low && rate * band.Count.Passes <= band.High;
 
     double? Exact(Term condition, Draw draw)

@@ -1,5 +1,7 @@
 using System.Collections.Immutable;
 using Microsoft.CodeAnalysis;
+using Microsoft.CodeAnalysis.CSharp;
+using Microsoft.CodeAnalysis.CSharp.Syntax;
 using Microsoft.CodeAnalysis.Operations;
 
 namespace Assize.Analyzers;
@@ -19,6 +21,22 @@ sealed class SuiteReader
     /// <summary>Whether a method can hold anything to read, told without looking at its operations.</summary>
     public TestFramework? Admit(IMethodSymbol method, SyntaxNode body) =>
         Gate.HasLoop(body) ? _tests.FrameworkOf(method) : null;
+
+    /// <summary>Every randomized assertion of a file, with or without a rule for it, in source order.</summary>
+    public IEnumerable<AssertionReading> Read(SemanticModel model, CancellationToken cancellation)
+    {
+        foreach (var test in model.SyntaxTree.GetRoot(cancellation).DescendantNodes().OfType<MethodDeclarationSyntax>())
+        {
+            // Nothing is bound before the method is known to be a test with something to read in it.
+            if (test is not { Body: { } body, AttributeLists.Count: > 0 }
+                || model.GetDeclaredSymbol(test, cancellation) is not { } method
+                || Admit(method, body) is not { } framework
+                || model.GetOperation(test, cancellation) is not IMethodBodyOperation { BlockBody: { } block })
+                continue;
+            foreach (AssertionReading reading in Read(method, framework, block, cancellation))
+                yield return reading;
+        }
+    }
 
     public ImmutableArray<AssertionReading> Read(
         IMethodSymbol method, TestFramework framework, IOperation body, CancellationToken cancellation)
@@ -55,7 +73,8 @@ sealed class SuiteReader
             .Select(operation => Demand(operation, framework, writes, known, cancellation))
             .OfType<Requirement>()
             .ToList();
-        var subject = new Subject(writes, _types, new Evaluator(writes, known, cancellation), row, runs);
+        var subject = new Subject(
+            writes, _types, new Evaluator(writes, known, cancellation), row, runs, framework.Name, NameOf(method));
         foreach (Requirement requirement in Pairing.Of(requirements))
         {
             cancellation.ThrowIfCancellationRequested();
@@ -63,6 +82,10 @@ sealed class SuiteReader
                 yield return reading;
         }
     }
+
+    static string NameOf(IMethodSymbol method) => method.ToDisplayString(SymbolDisplayFormat.CSharpErrorMessageFormat
+        .WithParameterOptions(SymbolDisplayParameterOptions.None)
+        .WithMemberOptions(SymbolDisplayMemberOptions.IncludeContainingType));
 
     static bool IsCandidate(IOperation operation, TestFramework framework) =>
         operation is IThrowOperation || (operation is IInvocationOperation call && framework.IsAssertion(call.TargetMethod));

@@ -9,6 +9,9 @@ namespace Assize.Analyzers;
 /// </summary>
 abstract class TestFramework
 {
+    /// <summary>What reports call it.</summary>
+    public abstract string Name { get; }
+
     /// <summary>A type without which the framework is not there.</summary>
     public abstract string AssertionType { get; }
 

@@ -1,4 +1,3 @@
-using Assize.Bounds;
 using Microsoft.CodeAnalysis;
 
 namespace Assize.Analyzers;
@@ -25,8 +24,7 @@ sealed class BlindAssertion : Rule
     {
         if (reading is not AssertionReading assertion || assertion.Tolerance <= 0)
             return null;
-        double? affordable = Question.Ask<double>(() => ProportionAssessment.ToleranceAffordable(
-            assertion.Trials, assertion.Rate.Value, Chance.OfOneRun(limits.Risk, assertion.Runs)));
+        double? affordable = assertion.ToleranceAffordable(limits.Risk);
         return What(assertion, affordable, limits) is { } what
             ? Report(reading, null, what, AssertionText.Asks(assertion), Cure(assertion, affordable, limits))
             : null;
@@ -34,15 +32,16 @@ sealed class BlindAssertion : Rule
 
     static string? What(AssertionReading assertion, double? affordable, Limits limits)
     {
-        if (assertion.AcceptLow == 0 && assertion.AcceptHigh == assertion.Trials)
-            return "Cannot fail: every count passes";
-        if (assertion.RateCaught(limits.Confidence) is not { } caught)
-            return $"Catches no wrong rate with probability {Numbers.Share(limits.Confidence)}";
-        double distance = Math.Abs(caught - assertion.Rate.Value);
-        if (distance > ManyTimes * assertion.Tolerance)
-            return $"Can miss a rate of nearly {Numbers.Share(caught)}, {Times(distance / assertion.Tolerance)} times the tolerance away";
+        if (assertion.CannotFail)
+            return $"Cannot fail: every {(assertion.Statistic == Statistic.Proportion ? "count" : "draw")} passes";
+        if (assertion.DefectCaught(limits.Confidence) is not { } defect)
+            return assertion.Statistic == Statistic.Proportion
+                ? $"Catches no wrong rate with probability {Numbers.Share(limits.Confidence)}" : null;
+        string nearly = $"Can miss a {AssertionText.Unit(assertion)} of nearly {Numbers.Share(assertion.Target + defect ?? defect)}";
+        if (Math.Abs(defect) > ManyTimes * assertion.Tolerance)
+            return $"{nearly}, {Times(Math.Abs(defect) / assertion.Tolerance)} times the tolerance away";
         return affordable is { } narrow && assertion.Tolerance > ManyTimes * narrow
-            ? $"Can miss a rate of nearly {Numbers.Share(caught)}: the band is {Times(assertion.Tolerance / narrow)} times as wide as the trials afford"
+            ? $"{nearly}: the band is {Times(assertion.Tolerance / narrow)} times as wide as the trials afford"
             : null;
     }
 

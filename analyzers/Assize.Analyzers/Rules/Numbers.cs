@@ -24,18 +24,23 @@ static class Numbers
     /// <summary>
     /// A rate rounded to four digits away from another one, so that what is said to be caught is caught.
     /// </summary>
-    public static string ShareAwayFrom(double share, double origin)
-    {
-        double unit = Math.Pow(10, Math.Floor(Math.Log10(Math.Max(Math.Abs(share), 1e-12))) - 3);
-        double rounded = share > origin ? Math.Ceiling(share / unit) * unit : Math.Floor(share / unit) * unit;
-        return Math.Min(1, Math.Max(0, rounded)).ToString("G4", CultureInfo.InvariantCulture);
-    }
+    public static string ShareAwayFrom(double share, double origin) =>
+        Share(Math.Min(1, Math.Max(0, RoundedAwayFrom(share, origin))));
+
+    /// <summary>The same for a value that need not be a rate.</summary>
+    public static string AwayFrom(double value, double origin) => Share(RoundedAwayFrom(value, origin));
 
     /// <summary>A number rounded down to two significant digits.</summary>
     public static string ShareBelow(double share)
     {
         double unit = Math.Pow(10, Math.Floor(Math.Log10(share)) - 1);
         return (Math.Floor(share / unit) * unit).ToString("G2", CultureInfo.InvariantCulture);
+    }
+
+    static double RoundedAwayFrom(double value, double origin)
+    {
+        double unit = Math.Pow(10, Math.Floor(Math.Log10(Math.Max(Math.Abs(value), 1e-12))) - 3);
+        return value > origin ? Math.Ceiling(value / unit) * unit : Math.Floor(value / unit) * unit;
     }
 
     static string Whole(double runs, Func<double, double> round)

@@ -78,19 +78,22 @@ static class Inspector
         AssertionReading reading, Place place, string framework, Limits limits, IReadOnlyList<InspectedFinding> findings) => new(place)
     {
         Framework = framework,
-        Shape = "counted in a loop",
-        Statistic = "proportion",
+        Shape = reading.Shape.ToString(),
+        Statistic = StatisticNames.Of(reading.Statistic),
         Trials = reading.Trials,
-        AcceptedLow = (double)reading.AcceptLow / reading.Trials,
-        AcceptedHigh = (double)reading.AcceptHigh / reading.Trials,
-        Target = reading.Rate.Value,
+        AcceptedLow = reading.Accepted.Low / Scale(reading),
+        AcceptedHigh = reading.Accepted.High / Scale(reading),
+        Target = reading.Target,
         Seed = Seed(reading.Seeding),
         FalseFailure = reading.FalseFailure,
-        SmallestDefectCaught = reading.RateCaught(limits.Confidence) - reading.Rate.Value,
+        SmallestDefectCaught = reading.DefectCaught(limits.Confidence),
         TrialsNeeded = reading.TrialsNeeded(limits.Risk),
-        Theorem = "exact binomial",
+        Theorem = reading.Assessment.Theorem,
         Findings = findings,
     };
+
+    // Counts are shown as shares, the unit of their target.
+    static double Scale(AssertionReading reading) => reading.Statistic == Statistic.Proportion ? reading.Trials : 1;
 
     static string Seed(Seeding seeding) => seeding switch
     {

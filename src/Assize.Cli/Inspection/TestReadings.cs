@@ -1,6 +1,5 @@
 using Assize.Analyzers;
 using Microsoft.CodeAnalysis;
-using Microsoft.CodeAnalysis.CSharp;
 using Microsoft.CodeAnalysis.CSharp.Syntax;
 using Microsoft.CodeAnalysis.Operations;
 
@@ -19,25 +18,8 @@ static class TestReadings
     {
         var root = tree.GetRoot(token);
         var model = compilation.GetSemanticModel(tree);
-        return Assertions(root, model, compilation, token).Concat(Claims(root, model, compilation, token));
-    }
-
-    static IEnumerable<(Reading, string)> Assertions(
-        SyntaxNode root, SemanticModel model, Compilation compilation, CancellationToken token)
-    {
-        if (SuiteReader.For(compilation) is not { } suite)
-            yield break;
-        foreach (var test in root.DescendantNodes().OfType<MethodDeclarationSyntax>())
-        {
-            // Nothing is bound before the method is known to be a test with something to read in it.
-            if (test is not { Body: { } body, AttributeLists.Count: > 0 }
-                || model.GetDeclaredSymbol(test, token) is not { } method
-                || suite.Admit(method, body) is not { } framework
-                || model.GetOperation(test, token) is not IMethodBodyOperation { BlockBody: { } block })
-                continue;
-            foreach (var reading in suite.Read(method, framework, block, token))
-                yield return (reading, framework.GetType().Name.Replace("Framework", "", StringComparison.Ordinal));
-        }
+        var assertions = SuiteReader.For(compilation)?.Read(model, token) ?? [];
+        return assertions.Select(reading => ((Reading)reading, reading.Framework)).Concat(Claims(root, model, compilation, token));
     }
 
     static IEnumerable<(Reading, string)> Claims(

@@ -112,7 +112,7 @@ public class SpellingTests
 
         var reading = Verify.Reading($"{Count}\n{asserting}");
 
-        Assert.Equal((passing[0], passing[^1]), ((int)reading.AcceptLow, (int)reading.AcceptHigh));
+        Assert.Equal((passing[0], passing[^1]), ((int)reading.Accepted.Low!, (int)reading.Accepted.High!));
     }
 
     [Fact]
@@ -121,8 +121,8 @@ public class SpellingTests
         var reading = Verify.Reading(
             "int hits = 0; for (int i = 0; i < 300; i++) if (own.Next(6) == 3) hits++; Assert.InRange(hits, 30, 80);");
 
-        Assert.True(reading.Rate.IsLaw);
-        Assert.Equal(1 / 6.0, reading.Rate.Value);
+        Assert.Equal(Basis.Law, reading.Basis);
+        Assert.Equal(1 / 6.0, reading.Target);
         AssertEncloses(reading, ExactBinomial.Outside(300, 30, 80, 1, 6));
     }
 
@@ -161,8 +161,8 @@ public class SpellingTests
 
     static void Holds(AssertionReading reading, int low, int high, double rate)
     {
-        Assert.Equal((low, high), ((int)reading.AcceptLow, (int)reading.AcceptHigh));
-        Assert.Equal(rate, reading.Rate.Value, 1e-12);
+        Assert.Equal((low, high), ((int)reading.Accepted.Low!, (int)reading.Accepted.High!));
+        Assert.Equal(rate, reading.Target!.Value, 1e-12);
         AssertEncloses(
             reading, ExactBinomial.Outside((int)reading.Trials, low, high, (int)Math.Round(rate * 100), 100));
     }

@@ -7,6 +7,8 @@ namespace Assize.Analyzers;
 /// <summary>NUnit: classic assertions, and `Assert.That` with constraints.</summary>
 sealed class NUnitFramework : TestFramework
 {
+    public override string Name => "NUnit";
+
     public override string AssertionType => "NUnit.Framework.Assert";
 
     public override bool IsTestAttribute(INamedTypeSymbol attribute) =>

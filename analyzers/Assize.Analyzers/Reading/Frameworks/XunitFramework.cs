@@ -7,6 +7,8 @@ namespace Assize.Analyzers;
 /// <summary>xunit, v2 and v3: their assertions are spelled alike.</summary>
 sealed class XunitFramework : TestFramework
 {
+    public override string Name => "xunit";
+
     public override string AssertionType => "Xunit.Assert";
 
     public override bool IsTestAttribute(INamedTypeSymbol attribute) => attribute.Name == "FactAttribute"

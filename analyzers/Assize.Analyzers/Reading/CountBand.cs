@@ -7,4 +7,4 @@ namespace Assize.Analyzers;
 /// <param name="Shares">The band as shares of the trials, in real arithmetic, for other numbers of trials.</param>
 /// <param name="Centre">The author's target as a rate; null when the band has one side or ends at 0 or 1.</param>
 /// <param name="Tolerance">Half the width meant, as a rate; 0 without a centre.</param>
-sealed record Band(Term.Sum Count, long Low, long High, Interval Shares, double? Centre, double Tolerance);
+sealed record CountBand(Term.Sum Count, long Low, long High, Interval Shares, double? Centre, double Tolerance);
