@@ -8,7 +8,7 @@ namespace Assize.Bounds;
 /// <para>Guarantee: at least the true probability, at every number of trials.</para>
 /// <para>Accuracy: within 1e-11 of the formula, rounded up, of a margin 1e-15 smaller; the formula is at most 3.7 times
 /// the probability for two-point draws.</para>
-/// <para>Source: V. Bentkus, Ann. Probab. 32 (2004) 1650–1673, Theorem 1.1 (from memory); I. Pinelis, IMS Lecture Notes
+/// <para>Source: V. Bentkus, Ann. Probab. 32 (2004) 1650–1673, Theorem 1.1 (from memory); I. Pinelis, IMS LNMS
 /// 51 (2006) 33–52, abstract.</para>
 /// </remarks>
 public static class BentkusVariance
