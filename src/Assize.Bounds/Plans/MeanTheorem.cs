@@ -20,6 +20,9 @@ abstract class MeanTheorem
     /// less.</summary>
     public abstract double Beyond(MeanFacts facts, long trials, double mean, double margin);
 
+    /// <summary>Whether a bound takes a sum over many terms, the more of them the more trials.</summary>
+    public virtual bool IsCostly => false;
+
     public static IReadOnlyList<MeanTheorem> All { get; } =
     [
         .. from type in typeof(MeanTheorem).Assembly.GetTypes()

@@ -163,6 +163,8 @@ public static class Bentkus
     {
         const long MostTrials = 1_000_000_000;
 
+        public override bool IsCostly => true;
+
         public override string Name => "Bentkus";
 
         public override string Assumes => "independent draws in a range";

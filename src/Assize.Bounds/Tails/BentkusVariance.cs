@@ -143,6 +143,8 @@ public static class BentkusVariance
 
     sealed class OfMeans : MeanTheorem
     {
+        public override bool IsCostly => true;
+
         public override string Name => "Bentkus, from a variance";
 
         public override string Assumes => "independent draws in a range, of bounded standard deviation";
